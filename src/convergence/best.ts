@@ -33,11 +33,9 @@ export function chooseBest(estimates: readonly MethodEstimate[]): BestValue | nu
   }
   const apart = Math.abs(first.value - second.value);
   const sound = apart <= first.halfWidth + second.halfWidth;
-  // What the second's own half-width explains is no news about the first.
-  const halfWidth = Math.max(first.halfWidth, Math.min(apart, first.halfWidth + second.halfWidth));
   return {
     value: first.value,
-    halfWidth: sound ? halfWidth : apart,
+    halfWidth: Math.max(first.halfWidth, apart),
     carrier: first.method,
     second: second.method,
     apart,

@@ -1,0 +1,42 @@
+/** The steps of a ladder, coarsest first, each half the last. */
+export interface LadderPlan {
+  /** s, or rad. */
+  readonly steps: readonly number[];
+  /** Index of the author's step; null for a claim without a solution. */
+  readonly authors: number | null;
+}
+
+/** Coarser than 16 steps an orbit no method of the catalog has anything to say about an apsis. */
+const COARSEST_PER_ORBIT = 16;
+/** Halvings below the author's step: a first-order method gains a digit, a fourth-order one reaches rounding. */
+const HALVINGS_BELOW = 4;
+/** Steps an orbit to centre the ladder on, where the claim gives no solution. */
+const DEFAULT_PER_ORBIT = 256;
+
+/**
+ * Lays the ladder round the author's step: down to `HALVINGS_BELOW` halvings, up to the coarsest that can
+ * say anything, with at least `rungs` in all. Coarse rungs cost next to nothing; fine ones are left out
+ * while the whole would cost more than `affordable` evaluations.
+ *
+ * @param period osculating period, s (2π in angle form)
+ * @param cost evaluations that one rung of that many steps an orbit takes, over all methods
+ */
+export function planLadder(
+  authorsStep: number | null,
+  period: number,
+  rungs: number,
+  cost: (stepsPerOrbit: number) => number,
+  affordable: number,
+): LadderPlan {
+  const step = authorsStep ?? period / DEFAULT_PER_ORBIT;
+  const perOrbit = period / step;
+  let coarser = 0;
+  while (perOrbit / 2 ** (coarser + 1) >= COARSEST_PER_ORBIT) coarser++;
+  let finer = Math.max(HALVINGS_BELOW, rungs - 1 - coarser);
+  // All rungs together cost twice the finest.
+  while (finer > 0 && 2 * cost(perOrbit * 2 ** finer) > affordable) finer--;
+  while (coarser + finer + 1 < rungs && perOrbit / 2 ** (coarser + 1) >= 2) coarser++;
+  const steps: number[] = [];
+  for (let k = -coarser; k <= finer; k++) steps.push(step / 2 ** k);
+  return { steps, authors: authorsStep === null ? null : coarser };
+}
