@@ -32,6 +32,8 @@ export interface Run {
   readonly times: readonly number[];
   /** Apsidal angle at each passage, unwrapped, whole turns included, rad. */
   readonly angles: readonly number[];
+  /** The same less the first and less one whole turn a passage, rad: small, and so with all their digits. */
+  readonly advances: readonly number[];
   /** Distance at each passage, m. */
   readonly distances: readonly number[];
   readonly steps: number;
