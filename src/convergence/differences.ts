@@ -21,6 +21,9 @@ export interface Difference {
 /** At 4 times its own 95 % noise a difference moves a local exponent by at most log2(1.25 / 0.75) = 0.7. */
 const CLEAR_OF_NOISE = 4;
 
+export const isClear = (difference: number, noise: number): boolean =>
+  Math.abs(difference) > CLEAR_OF_NOISE * noise;
+
 /**
  * Differences of the rungs at the fine end that all gave a figure: a rung without one ends the ladder,
  * since nothing coarser can be compared across the gap.
@@ -33,7 +36,7 @@ export function successiveDifferences(points: readonly LadderPoint[]): Differenc
     if (coarse.value === null || fine.value === null) break;
     const value = coarse.value - fine.value;
     const noise = Math.hypot(coarse.floor, fine.floor);
-    differences.unshift({ rung: k, value, noise, clear: Math.abs(value) > CLEAR_OF_NOISE * noise });
+    differences.unshift({ rung: k, value, noise, clear: isClear(value, noise) });
   }
   return differences;
 }

@@ -68,12 +68,16 @@ function agreeingRun(differences: readonly Difference[], last: number): Differen
   return exponents.length === 0 || !(exponents[0]!.value > 0) ? [] : differences.slice(first, last + 1);
 }
 
-/** log2|D| on log2 h, weighted by how well rounding lets each difference be known. */
+/**
+ * log2|D| on log2 h. A difference is off the law by the next term of the expansion, which fades by half a
+ * rung or faster, and by its rounding; the weights are one over both in squares.
+ */
 function fitWindow(differences: readonly Difference[]): Window {
+  const nextTerm = (d: Difference): number => AGREEMENT / 2 ** (d.rung - differences[0]!.rung);
   const line = fitLine(
     differences.map((d) => -d.rung),
     differences.map((d) => Math.log2(Math.abs(d.value))),
-    differences.map((d) => 1 / (AGREEMENT ** 2 + (d.noise / d.value / Math.LN2) ** 2)),
+    differences.map((d) => 1 / (nextTerm(d) ** 2 + (d.noise / d.value / Math.LN2) ** 2)),
   )!;
   const half = studentT95(line.degrees) * line.slopeError!;
   return {

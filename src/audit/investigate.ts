@@ -1,0 +1,79 @@
+import type { Claim } from "../claim/claim.js";
+import { type BestValue, chooseBest, type MethodEstimate } from "../convergence/best.js";
+import { nominalLength } from "../measure/limits.js";
+import { type ExecuteOptions, execute } from "./execute.js";
+import { type Extras, gather } from "./gather.js";
+import { type AnalysedLadder, analyse } from "./ladders.js";
+import { type LadderPlan, planLadder } from "./plan.js";
+import type { JobPool } from "./pool.js";
+import type { Prepared } from "./prepare.js";
+import { costPerStep, planTasks } from "./tasks.js";
+
+/** Everything that was run for a claim, analysed; figures in the claim's unit. */
+export interface Investigation {
+  readonly plan: LadderPlan;
+  /** The author's first, where there is one. */
+  readonly ladders: readonly AnalysedLadder[];
+  readonly solution: AnalysedLadder | null;
+  readonly extras: Extras | null;
+  readonly estimates: readonly MethodEstimate[];
+  readonly best: BestValue | null;
+}
+
+/** Evaluations that a whole audit may take by default: some ten seconds on one core. */
+const AFFORDABLE = 1e9;
+
+export async function investigate(
+  claim: Claim,
+  prepared: Prepared,
+  pool: JobPool,
+  options: ExecuteOptions,
+): Promise<Investigation> {
+  const { recipe, scenario, witnesses, authorsStep } = prepared;
+  const { unit, baseline } = claim.claimed;
+  const subtracted = baseline === "subtracted";
+  const authors = claim.solution?.method ?? null;
+  const methods = authors === null ? [...witnesses] : [authors, ...witnesses];
+  const orbits = nominalLength(scenario) / scenario.period;
+  const perStep = methods.reduce((sum, method) => sum + costPerStep(method), 0);
+  const plan = planLadder(
+    authorsStep,
+    scenario.period,
+    claim.audit.rungs,
+    (stepsPerOrbit) => stepsPerOrbit * orbits * perStep * (subtracted ? 2 : 1),
+    AFFORDABLE,
+  );
+  const ensembleRung = plan.authors ?? Math.floor(plan.steps.length / 2);
+  const tasks = methods.flatMap((method) =>
+    planTasks(method, scenario, plan, ensembleRung, {
+      nullRuns: subtracted || method === authors,
+      ledger: method === authors,
+    }),
+  );
+  const outcomes = await execute(pool, recipe, scenario, tasks, options);
+  const gathered = methods.map((method) =>
+    gather(
+      method,
+      method === authors ? "solution" : "witness",
+      plan,
+      ensembleRung,
+      scenario.nullParameters === null,
+      tasks,
+      outcomes,
+    ),
+  );
+  const ladders = gathered.map(({ runs }) => analyse(runs, scenario, unit, subtracted));
+  const estimates = ladders
+    .filter(({ runs }) => runs.role === "witness")
+    .flatMap(({ runs, analysis }) =>
+      analysis.limit === null ? [] : [{ method: runs.method.name, ...analysis.limit }],
+    );
+  return {
+    plan,
+    ladders,
+    solution: authors === null ? null : ladders[0]!,
+    extras: authors === null ? null : gathered[0]!.extras,
+    estimates,
+    best: chooseBest(estimates),
+  };
+}

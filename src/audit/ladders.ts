@@ -1,0 +1,146 @@
+import type { QuotedUnit } from "../claim/claim.js";
+import { type Difference, isClear, type LadderPoint } from "../convergence/differences.js";
+import { analyseLadder, type LadderAnalysis } from "../convergence/ladder.js";
+import { roundingHalfWidth } from "../convergence/rounding.js";
+import { type StateOrder, stateOrder } from "../convergence/state-order.js";
+import { stateDistance } from "../measure/early-state.js";
+import type { PreparedScenario } from "../measure/run.js";
+import { figureOf } from "./figure.js";
+import type { Reading } from "./job.js";
+import type { MethodRuns } from "./method-runs.js";
+
+/** One method's ladder, analysed; figures in the claim's unit. */
+export interface AnalysedLadder {
+  readonly runs: MethodRuns;
+  /** A rung's raw figure, its null run's, and the one that the claim is about. */
+  readonly raw: readonly LadderPoint[];
+  readonly off: readonly LadderPoint[];
+  readonly figure: readonly LadderPoint[];
+  /** Of the figure that the claim is about. */
+  readonly analysis: LadderAnalysis;
+  readonly stateDistances: readonly Difference[];
+  readonly stateOrder: StateOrder | null;
+  /** 95 % half-width of rounding in the claim's figure at the ensemble's rung; null if not measured. */
+  readonly rounding: number | null;
+}
+
+/**
+ * Analyses what was run with one method.
+ *
+ * A subtracted figure is the difference of two that each converge on their own. Its ladder is seldom
+ * monotone, since the phase of the partial step shifts between the two runs; so its window and order are
+ * those of the run and its null run, and its limit is the tighter of the difference of their limits and the
+ * limit of the differences.
+ */
+export function analyse(
+  runs: MethodRuns,
+  scenario: PreparedScenario,
+  unit: QuotedUnit,
+  subtracted: boolean,
+): AnalysedLadder {
+  const raw = points(runs, unit, (on) => on);
+  const off = points(runs, unit, (_, off) => off);
+  const difference = differencePoints(runs, unit);
+  const figure = subtracted ? difference.points : raw.points;
+  const analysis = subtracted
+    ? subtractedAnalysis(analyseLadder(raw.points), analyseLadder(off.points), analyseLadder(figure))
+    : analyseLadder(raw.points);
+  const stateDistances = distances(runs, scenario);
+  return {
+    runs,
+    raw: raw.points,
+    off: off.points,
+    figure,
+    analysis,
+    stateDistances,
+    stateOrder: stateOrder(stateDistances),
+    rounding: subtracted ? difference.rounding : raw.rounding,
+  };
+}
+
+interface Points {
+  readonly points: readonly LadderPoint[];
+  readonly rounding: number | null;
+}
+
+function points(
+  runs: MethodRuns,
+  unit: QuotedUnit,
+  pick: (on: Reading | null, off: Reading | null) => Reading | null,
+): Points {
+  return withFloor(
+    runs,
+    runs.rungs.map((rung) => figureOf(pick(rung.on, rung.off), unit)),
+    runs.ensemble.on.map((on, i) => figureOf(pick(on, runs.ensemble.off[i] ?? null), unit)),
+  );
+}
+
+function differencePoints(runs: MethodRuns, unit: QuotedUnit): Points {
+  const difference = (on: Reading | null, off: Reading | null): number | null => {
+    const [value, base] = [figureOf(on, unit), figureOf(off, unit)];
+    return value === null || base === null ? null : value - base;
+  };
+  return withFloor(
+    runs,
+    runs.rungs.map((rung) => difference(rung.on, rung.off)),
+    runs.ensemble.on.map((on, i) => difference(on, runs.ensemble.off[i] ?? null)),
+  );
+}
+
+/**
+ * Rounding walks at random: it grows as the square root of the number of steps (Brouwer, A. J. 46, 149,
+ * 1937). On rungs coarser than the ensemble's it is not taken to be less.
+ */
+function withFloor(
+  runs: MethodRuns,
+  values: readonly (number | null)[],
+  members: readonly (number | null)[],
+): Points {
+  const rounding = roundingHalfWidth(members);
+  const growth = (k: number) => Math.max(1, 2 ** ((k - runs.ensemble.rung) / 2));
+  return { points: values.map((value, k) => ({ value, floor: (rounding ?? 0) * growth(k) })), rounding };
+}
+
+function subtractedAnalysis(
+  raw: LadderAnalysis,
+  off: LadderAnalysis,
+  difference: LadderAnalysis,
+): LadderAnalysis {
+  const direct = difference.limit;
+  const apart =
+    raw.limit === null || off.limit === null
+      ? null
+      : { value: raw.limit.value - off.limit.value, halfWidth: raw.limit.halfWidth + off.limit.halfWidth };
+  const limit = direct === null || (apart !== null && apart.halfWidth < direct.halfWidth) ? apart : direct;
+  if (difference.shape === "asymptotic") return { ...difference, limit };
+  const window: readonly [number, number] | null =
+    raw.window === null || off.window === null
+      ? null
+      : [Math.max(raw.window[0], off.window[0]), Math.min(raw.window[1], off.window[1])];
+  // Two coarse windows that do not overlap leave no rung where both laws hold.
+  if (window === null || window[0] > window[1]) return { ...difference, limit };
+  return { shape: raw.shape, order: raw.order, orderInterval: raw.orderInterval, window, limit };
+}
+
+/** Distances of successive early states, the finer ones included. */
+function distances(runs: MethodRuns, scenario: PreparedScenario): Difference[] {
+  const states = [...runs.rungs.map((rung) => rung.early), ...runs.finerEarly];
+  const centre = runs.rungs[runs.ensemble.rung]?.early ?? null;
+  const members = runs.ensemble.early.filter((state) => state !== null);
+  const spread =
+    centre === null || members.length === 0
+      ? 0
+      : Math.max(...members.map((state) => stateDistance(scenario, state, centre)));
+  const result: Difference[] = [];
+  for (let rung = 0; rung + 1 < states.length; rung++) {
+    const [coarse, fine] = [states[rung]!, states[rung + 1]!];
+    if (coarse === null || fine === null) {
+      result.length = 0;
+      continue;
+    }
+    const value = stateDistance(scenario, coarse, fine);
+    const noise = spread * Math.max(1, 2 ** ((rung + 1 - runs.ensemble.rung) / 2));
+    result.push({ rung, value, noise, clear: isClear(value, noise) });
+  }
+  return result;
+}

@@ -1,0 +1,105 @@
+import { compileStepLoop } from "../kernel/compile.js";
+import { compileObservables } from "../kernel/observables.js";
+import type { StepLoop } from "../kernel/step-loop.js";
+import { type CompiledSystem, compileSystem } from "../kernel/system.js";
+import { apsidalAdvance } from "../measure/advance.js";
+import { stateAfter } from "../measure/early-state.js";
+import { eccentricityDrift } from "../measure/eccentricity-vector.js";
+import { runLedger } from "../measure/ledger.js";
+import { runLimits } from "../measure/limits.js";
+import { runPassages } from "../measure/passages.js";
+import type { PreparedScenario, Run } from "../measure/run.js";
+import type { MethodDefinition } from "../methods/definition.js";
+import type { Job, Outcome, Reading, SystemRecipe, Task } from "./job.js";
+
+interface Built {
+  readonly system: CompiledSystem;
+  readonly loops: Map<string, StepLoop>;
+}
+
+/** Loops built so far in this thread: jobs of one audit share them, and the compiler's work on them. */
+const built = new Map<string, Built>();
+/** A claim asks for one system; more than a few at once only come from a long list of claims. */
+const KEPT_SYSTEMS = 8;
+
+function systemOf(recipe: SystemRecipe): Built {
+  const key = JSON.stringify(recipe);
+  let known = built.get(key);
+  if (known === undefined) {
+    if (built.size >= KEPT_SYSTEMS) built.delete(built.keys().next().value!);
+    known = { system: compileSystem(recipe.definition, recipe), loops: new Map() };
+    built.set(key, known);
+  }
+  return known;
+}
+
+/** The step loop of a method over a system, built once a thread. */
+export function loopOf(recipe: SystemRecipe, method: MethodDefinition): StepLoop {
+  const { system, loops } = systemOf(recipe);
+  let loop = loops.get(method.name);
+  if (loop === undefined) {
+    loop = compileStepLoop(system, method);
+    loops.set(method.name, loop);
+  }
+  return loop;
+}
+
+/** Does the tasks of a job in order. Pure but for the time it takes: the same job gives the same figures. */
+export default function runJob(job: Job): Outcome[] {
+  const loop = loopOf(job.system, job.method);
+  return job.tasks.map((task) => runTask(job, loop, task));
+}
+
+function runTask(job: Job, loop: StepLoop, task: Task): Outcome {
+  const { scenario, system } = job;
+  switch (task.kind) {
+    case "run":
+      return { kind: "run", reading: read(runOf(loop, scenario, task)) };
+    case "early": {
+      const start = task.state === undefined ? scenario : { ...scenario, state: task.state };
+      const after = stateAfter(loop, start, scenario.parameters, task.step, task.steps);
+      return { kind: "early", state: after.status === "done" ? after.state : null };
+    }
+    case "ledger": {
+      const run = runPassages(loop, scenario, scenario.parameters, task.step);
+      if (run.status !== "ok") return { kind: "ledger", entries: null };
+      const watched = compileObservables(systemOf(system).system).watched(scenario.parameters);
+      return {
+        kind: "ledger",
+        entries: runLedger(loop, scenario, scenario.parameters, task.step, run, watched),
+      };
+    }
+    case "second-reading": {
+      const drift = eccentricityDrift(loop, scenario, parametersOf(scenario, task.effect), task.step);
+      return {
+        kind: "second-reading",
+        perOrbit: drift?.perOrbit ?? null,
+        halfWidth: drift?.halfWidth ?? null,
+      };
+    }
+  }
+}
+
+function parametersOf(scenario: PreparedScenario, effect: "on" | "off"): readonly number[] {
+  return effect === "on" ? scenario.parameters : (scenario.nullParameters ?? scenario.parameters);
+}
+
+function runOf(loop: StepLoop, scenario: PreparedScenario, task: Task & { kind: "run" }): Run {
+  const start = task.state === undefined ? scenario : { ...scenario, state: task.state };
+  const limits = { ...runLimits(scenario, task.step), evaluations: task.evaluations };
+  return runPassages(loop, start, parametersOf(scenario, task.effect), task.step, limits);
+}
+
+function read(run: Run): Reading {
+  const advance = apsidalAdvance(run);
+  return {
+    status: run.status,
+    advance: advance?.perOrbit ?? null,
+    advanceError: advance?.perOrbitError ?? null,
+    period: advance?.radialPeriod ?? null,
+    numbers: run.numbers,
+    advances: run.advances,
+    evaluations: run.evaluations,
+    seconds: run.seconds,
+  };
+}

@@ -1,0 +1,98 @@
+import { ENSEMBLE_SIZE, lastBitEnsemble } from "../convergence/rounding.js";
+import { earlySteps } from "../measure/early-state.js";
+import { nominalLength } from "../measure/limits.js";
+import type { PreparedScenario } from "../measure/run.js";
+import type { MethodDefinition } from "../methods/definition.js";
+import type { Task } from "./job.js";
+import type { LadderPlan } from "./plan.js";
+
+/** Where the outcome of a task belongs. */
+export type Slot =
+  | { readonly in: "rung"; readonly rung: number; readonly field: "on" | "off" | "early" }
+  | { readonly in: "finer-early"; readonly index: number }
+  | { readonly in: "ensemble"; readonly member: number; readonly field: "on" | "off" | "early" }
+  | { readonly in: "ledger"; readonly halved: boolean }
+  | { readonly in: "second-reading" };
+
+export interface PlannedTask {
+  readonly method: MethodDefinition;
+  readonly task: Task;
+  readonly slot: Slot;
+  /** Evaluations that it is expected to take. */
+  readonly cost: number;
+}
+
+/** Rungs finer than the ladder's on which only the early state is computed: an orbit costs little. */
+const FINER_EARLY = 3;
+/** Sweeps that the stages of an implicit step take, on the average over a ladder. */
+const SWEEPS = 8;
+/** A single run may take this many times the evaluations that it is expected to. */
+const PATIENCE = 6;
+
+/** Evaluations a step, as planned. */
+export function costPerStep(method: MethodDefinition): number {
+  switch (method.family) {
+    case "explicit-runge-kutta":
+      return method.b.length;
+    case "implicit-runge-kutta":
+      return method.b.length * SWEEPS;
+    case "splitting":
+      return method.stages.filter((stage) => "kick" in stage).length;
+  }
+}
+
+/**
+ * Everything to run with one method.
+ *
+ * @param ensembleRung the rung on which rounding is measured
+ * @param nullRuns whether null runs are called for: where the claim subtracts them, and for the author's method
+ * @param ledger whether what is conserved is to be watched: for the author's method
+ */
+export function planTasks(
+  method: MethodDefinition,
+  scenario: PreparedScenario,
+  ladder: LadderPlan,
+  ensembleRung: number,
+  { nullRuns, ledger }: { nullRuns: boolean; ledger: boolean },
+): PlannedTask[] {
+  const perStep = costPerStep(method);
+  const length = nominalLength(scenario);
+  const spanCost = (step: number): number => (length / step) * perStep;
+  const separateNull = nullRuns && scenario.nullParameters !== null;
+  const effects: readonly ("on" | "off")[] = separateNull ? ["on", "off"] : ["on"];
+  const coarse = earlySteps(ladder.steps[0]!, scenario.period);
+  const tasks: PlannedTask[] = [];
+  const add = (slot: Slot, task: Task, cost: number): void => {
+    tasks.push({ method, task, slot, cost });
+  };
+  const run = (slot: Slot, step: number, effect: "on" | "off", state?: readonly number[]): void => {
+    const cost = spanCost(step);
+    add(slot, { kind: "run", step, effect, evaluations: PATIENCE * cost, ...(state && { state }) }, cost);
+  };
+  const early = (slot: Slot, step: number, halvings: number, state?: readonly number[]): void => {
+    const steps = coarse * 2 ** halvings;
+    add(slot, { kind: "early", step, steps, ...(state && { state }) }, steps * perStep);
+  };
+
+  ladder.steps.forEach((step, rung) => {
+    for (const effect of effects) run({ in: "rung", rung, field: effect }, step, effect);
+    early({ in: "rung", rung, field: "early" }, step, rung);
+  });
+  for (let index = 0; index < FINER_EARLY; index++) {
+    const halvings = ladder.steps.length + index;
+    early({ in: "finer-early", index }, ladder.steps[0]! / 2 ** halvings, halvings);
+  }
+  const members = lastBitEnsemble(scenario.state);
+  for (let member = 0; member < ENSEMBLE_SIZE; member++) {
+    const step = ladder.steps[ensembleRung]!;
+    for (const field of effects) run({ in: "ensemble", member, field }, step, field, members[member]!);
+    early({ in: "ensemble", member, field: "early" }, step, ensembleRung, members[member]!);
+  }
+  if (ledger) {
+    const step = ladder.steps[ensembleRung]!;
+    add({ in: "ledger", halved: false }, { kind: "ledger", step }, 2 * spanCost(step));
+    add({ in: "ledger", halved: true }, { kind: "ledger", step: step / 2 }, 4 * spanCost(step));
+    add({ in: "second-reading" }, { kind: "second-reading", step, effect: "on" }, spanCost(step));
+  }
+  return tasks;
+}
