@@ -122,7 +122,8 @@ function findPassages(
     if (io[unconvergedAt(loop)] !== 0) return finish("unconverged");
     if (!allFinite(io, n)) return finish("non-finite");
     const before = done === 1 ? rateBefore : radialRate(form, io, n, n);
-    if (rate >= 0 && (done < asked || rateBefore < 0 || before < 0)) {
+    const stopped = done > 1 && done < asked;
+    if (rate >= 0 && (stopped || rateBefore < 0 || before < 0)) {
       // Zero to rounding at the bracket's start leaves nothing to search.
       const rest = before < 0 ? findRoot(partialStep, 0, before, step, rate) : 0;
       partialStep(rest);
