@@ -23,8 +23,9 @@ const VERY_STRONG = 10;
 const SMOOTH = 1;
 /** A curve that leaves a tenth of the variance unexplained still goes by its power law. */
 const EXPLAINED = 0.9;
-/** Range of exponents searched. */
+/** Range of exponents searched, and how finely. */
 const EXPONENTS = [0.1, 4] as const;
+const RESOLUTION = 1e-4;
 
 /**
  * Tells a steady drift, faster growth, a random walk and no growth apart, by the Bayesian information
@@ -69,7 +70,7 @@ export function growthOf(means: readonly number[], noise: number): Growth {
   const best = models.reduce((least, model) => (model.value < least.value ? model : least)).name;
 
   const curve = (): Growth =>
-    power.exponent >= FASTER && byName.line! - byName.power! > VERY_STRONG
+    (power.exponent ?? 0) >= FASTER && byName.line! - byName.power! > VERY_STRONG
       ? { kind: "faster", slope, exponent: power.exponent }
       : { kind: "linear", slope, exponent: power.exponent };
   const none = { kind: "none", slope, exponent: null } as const;
@@ -97,8 +98,14 @@ function squaresOff(x: readonly number[], y: readonly number[]): number {
   return y.reduce((sum, value, i) => sum + (value - line.intercept - line.slope * x[i]!) ** 2, 0);
 }
 
+interface PowerFit {
+  /** Null at the edge of the range searched. */
+  readonly exponent: number | null;
+  readonly squares: number;
+}
+
 /** Least squares over the exponent by golden section, over the rest by a line. */
-function fitPower(means: readonly number[]): { readonly exponent: number; readonly squares: number } {
+function fitPower(means: readonly number[]): PowerFit {
   const squares = (exponent: number): number =>
     squaresOff(
       means.map((_, k) => (k + 0.5) ** exponent),
@@ -106,13 +113,14 @@ function fitPower(means: readonly number[]): { readonly exponent: number; readon
     );
   const golden = (Math.sqrt(5) - 1) / 2;
   let [low, high]: [number, number] = [...EXPONENTS];
-  while (high - low > 1e-4) {
+  while (high - low > RESOLUTION) {
     const [left, right] = [high - golden * (high - low), low + golden * (high - low)];
     if (squares(left) < squares(right)) high = right;
     else low = left;
   }
   const exponent = (low + high) / 2;
-  return { exponent, squares: squares(exponent) };
+  const inside = exponent > EXPONENTS[0] + RESOLUTION && exponent < EXPONENTS[1] - RESOLUTION;
+  return { exponent: inside ? exponent : null, squares: squares(exponent) };
 }
 
 /** J. von Neumann, Annals of Mathematical Statistics 12 (1941) 367: squared successive differences over squares. */

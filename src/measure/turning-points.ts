@@ -14,8 +14,9 @@ const OVERSHOT = 4;
 const SETTLED = 1e-12;
 /** The step may be halved so often before that; an eighth-order loop gains over two digits each time. */
 const MOST_HALVINGS = 6;
-/** First guess at how far off the Newtonian value is; doubled until the bracket holds a root. */
+/** How far off the Newtonian value may be, as a part of it: at first, doubled until a root is bracketed, at last. */
 const FIRST_REACH = 1 / 1024;
+const LAST_REACH = 4;
 
 /**
  * How far the next apoapsis of a start at periapsis is from the wanted one, as 1 - wanted/reached: negative
@@ -81,8 +82,8 @@ function bracketRoot(
   fCentre: number,
 ): [number, number, number, number] | null {
   if (fCentre === 0) return [centre, 0, centre, 0];
-  for (let reach = FIRST_REACH; reach < 1; reach *= 2) {
-    for (const x of [centre * (1 + reach), centre * (1 - reach)]) {
+  for (let reach = FIRST_REACH; reach <= LAST_REACH; reach *= 2) {
+    for (const x of [centre * (1 + reach), centre / (1 + reach)]) {
       const fx = f(x);
       if (fx > 0 !== fCentre > 0) return [centre, fCentre, x, fx];
     }
