@@ -1,5 +1,5 @@
 import { compileStepLoop } from "../kernel/compile.js";
-import { compileObservables } from "../kernel/observables.js";
+import { conservedObservables } from "../kernel/observables.js";
 import type { StepLoop } from "../kernel/step-loop.js";
 import { type CompiledSystem, compileSystem } from "../kernel/system.js";
 import { apsidalAdvance } from "../measure/advance.js";
@@ -63,7 +63,7 @@ function runTask(job: Job, loop: StepLoop, task: Task): Outcome {
     case "ledger": {
       const run = runPassages(loop, scenario, scenario.parameters, task.step);
       if (run.status !== "ok") return { kind: "ledger", entries: null };
-      const watched = compileObservables(systemOf(system).system).watched(scenario.parameters);
+      const watched = conservedObservables(systemOf(system).system, scenario.parameters);
       return {
         kind: "ledger",
         entries: runLedger(loop, scenario, scenario.parameters, task.step, run, watched),

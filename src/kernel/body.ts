@@ -1,0 +1,30 @@
+import type { Code } from "./code.js";
+
+/** What a family needs to write the body of its step. */
+export interface StepContext {
+  /** Names of the coordinates in the loop, and of their rates in the same order. */
+  readonly coordinates: readonly string[];
+  readonly rates: readonly string[];
+  readonly velocityDependent: boolean;
+  /**
+   * Writes the accelerations at a place.
+   *
+   * @param prefix makes the names unique in the loop
+   * @param bind what each coordinate and rate goes by there
+   * @returns a name for each coordinate's acceleration
+   */
+  accelerate(code: Code, prefix: string, bind: (state: string) => string): string[];
+}
+
+/** One step of a method. The state's names are bare before the step; the body defines `n_` and the name. */
+export interface StepBody {
+  /** Before the loop: what is carried from step to step. */
+  readonly before: Code;
+  readonly step: Code;
+  readonly evaluationsPerStep: number;
+  /** Where set, the step keeps count of its evaluations in `evaluations` and sets `failed` where it must. */
+  readonly implicit: boolean;
+}
+
+/** Name of a state after the step. */
+export const next = (state: string): string => `n_${state}`;

@@ -1,0 +1,33 @@
+import { evaluateConstant } from "../formula/constant.js";
+import type { ExplicitRungeKutta } from "../methods/definition.js";
+import { next, type StepBody, type StepContext } from "./body.js";
+import { Code, weightedSum } from "./code.js";
+
+/** Stages in straight lines: y + h (a1 k1 + a2 k2 + ...), the sum from left to right, zeros left out. */
+export function explicitRungeKutta(method: ExplicitRungeKutta, context: StepContext): StepBody {
+  const { coordinates, rates } = context;
+  const a = method.a.map((row) => row.map(evaluateConstant));
+  const b = method.b.map(evaluateConstant);
+  const step = new Code();
+  // Derivatives of each state at each stage: of a coordinate its rate, of a rate its acceleration.
+  const slopes: Record<string, string[]> = {};
+  for (const state of [...coordinates, ...rates]) slopes[state] = [];
+  const combine = (state: string, weights: readonly number[]): string =>
+    `${state} + h * (${weightedSum(weights, slopes[state]!)})`;
+
+  for (let stage = 0; stage < b.length; stage++) {
+    const weights = a[stage]!;
+    const first = weights.every((weight) => weight === 0);
+    const at = (state: string): string => (first ? state : `${state}_${stage}`);
+    if (!first) {
+      for (const state of [...coordinates, ...rates]) step.define(at(state), combine(state, weights));
+    }
+    const accelerations = context.accelerate(step, `s${stage}_`, at);
+    coordinates.forEach((coordinate, i) => {
+      slopes[coordinate]!.push(at(rates[i]!));
+      slopes[rates[i]!]!.push(accelerations[i]!);
+    });
+  }
+  for (const state of [...coordinates, ...rates]) step.define(next(state), combine(state, b));
+  return { before: new Code(), step, evaluationsPerStep: b.length, implicit: false };
+}
