@@ -1,5 +1,4 @@
-/** A quantity of the state: one number, or the components of a vector. */
-export type Quantity = (state: Float64Array) => readonly number[];
+import type { Observable } from "../kernel/observables.js";
 
 /** Relative nudge of a central difference: the cube root of the rounding unit balances its two errors. */
 const NUDGE = Math.cbrt(Number.EPSILON);
@@ -17,7 +16,7 @@ export interface Conditioning {
   readonly rounding: number;
 }
 
-export function conditioningOf(quantity: Quantity, state: ArrayLike<number>): Conditioning {
+export function conditioningOf(quantity: Observable["value"], state: ArrayLike<number>): Conditioning {
   const trial = Float64Array.from(state);
   let natural = 0;
   let squares = 0;

@@ -1,20 +1,13 @@
+import type { Observable } from "../kernel/observables.js";
 import type { StepLoop } from "../kernel/step-loop.js";
 import type { DriftPattern, LedgerEntry } from "../result/result.js";
 import { aspectsOf, widestAspect } from "./aspects.js";
-import { conditioningOf, type Quantity } from "./conditioning.js";
+import { conditioningOf } from "./conditioning.js";
 import { driftOf } from "./drift.js";
 import { type OrbitMean, orbitMean } from "./orbit-mean.js";
 import type { PreparedScenario, Run } from "./run.js";
 import { ioAt, walk } from "./stepping.js";
 import { ThinnedSeries } from "./thinned-series.js";
-
-/** A conserved quantity to watch. */
-export interface Watched {
-  readonly name: string;
-  readonly value: Quantity;
-  /** The small order at which it varies of itself, in words or as a formula; null where it is exact. */
-  readonly truncatedAt: string | null;
-}
 
 /** What one run does to one conserved quantity. All changes are relative. */
 export interface LedgerReading {
@@ -58,10 +51,10 @@ export function runLedger(
   parameters: readonly number[],
   step: number,
   run: Run,
-  quantities: readonly Watched[],
+  quantities: readonly Observable[],
 ): LedgerReading[] {
   const every = Math.max(1, Math.round(scenario.period / step / SAMPLES_PER_ORBIT));
-  const books = quantities.map((watched) => new Book(watched, scenario, run, step));
+  const books = quantities.map((observable) => new Book(observable, scenario, run, step));
   const values = Float64Array.from(parameters);
   const io = ioAt(loop, scenario.state);
   const state = io.subarray(0, loop.dimension);
@@ -80,7 +73,7 @@ export function runLedger(
 
 /** The running account of one quantity: keeps one orbit's samples at a time. */
 class Book {
-  readonly #watched: Watched;
+  readonly #observable: Observable;
   readonly #period: number;
   readonly #passages: readonly number[];
   readonly #steps: number;
@@ -97,15 +90,15 @@ class Book {
   #largest = 0;
   #noise = 0;
 
-  constructor(watched: Watched, scenario: PreparedScenario, run: Run, step: number) {
-    this.#watched = watched;
+  constructor(observable: Observable, scenario: PreparedScenario, run: Run, step: number) {
+    this.#observable = observable;
     this.#period = scenario.period;
     this.#passages = run.times;
     this.#steps = run.steps;
     const state = Float64Array.from(scenario.state);
-    this.#start = watched.value(state);
+    this.#start = observable.value(state);
     const size = Math.hypot(...this.#start);
-    const { natural } = conditioningOf(watched.value, state);
+    const { natural } = conditioningOf(observable.value, state);
     this.#nearNothing = size < NEAR_NOTHING * natural;
     // A quantity made of nothing at all changes by its own value.
     this.#scale = (this.#nearNothing ? natural : size) || 1;
@@ -113,7 +106,7 @@ class Book {
   }
 
   enter(time: number, state: Float64Array): void {
-    const row = this.#watched.value(state).map((value, j) => (value - this.#start[j]!) / this.#scale);
+    const row = this.#observable.value(state).map((value, j) => (value - this.#start[j]!) / this.#scale);
     const size = Math.hypot(...row);
     this.#last = row;
     this.#largest = Math.max(this.#largest, size);
@@ -127,7 +120,7 @@ class Book {
     this.#phases.push((time - from) / (to - from));
     this.#rows.push(row);
     if (this.#next === 1) {
-      const { rounding } = conditioningOf(this.#watched.value, state);
+      const { rounding } = conditioningOf(this.#observable.value, state);
       this.#noise = Math.max(this.#noise, rounding / this.#scale);
     }
   }
@@ -149,7 +142,7 @@ class Book {
   }
 
   close(): LedgerReading {
-    const { name, truncatedAt } = this.#watched;
+    const { name, truncatedAt } = this.#observable;
     const start = this.#nearNothing ? null : this.#start.map((value) => value / this.#scale);
     const aspect = widestAspect(aspectsOf(this.#orbits.length > 1 ? this.#orbits : this.#ends(), start))!;
     const swing = this.#orbits.reduce((most, orbit) => Math.max(most, orbit.swing), 0);

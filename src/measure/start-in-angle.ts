@@ -1,12 +1,12 @@
 import type { Scenario } from "../claim/claim.js";
 import type { StepLoop } from "../kernel/step-loop.js";
 import { problemOfElements } from "./elements.js";
+import { INSTANT } from "./instant.js";
+import { noOrbitBetween } from "./motion-of-start.js";
 import { cosineAndSine } from "./orientation.js";
-import { parameterValues, type Started, type StartProblem, type SystemShape } from "./started.js";
+import { AT_APSIS, parameterValues, type Started, type StartProblem, type SystemShape } from "./started.js";
 import { shootForApoapsis } from "./turning-points.js";
 
-/** u' at a periapsis given in rounded numbers, as a part of u. */
-const AT_APSIS = 1e-12;
 /** Steps of a shot to a turn. */
 const STEPS_PER_TURN = 512;
 
@@ -30,14 +30,15 @@ export function startInAngle(
     w: number,
     K: number,
     orbit: { readonly semiMajorAxis: number; readonly eccentricity: number },
-    startsAtPeriapsis: boolean,
+    atApsis: boolean,
   ): Started | StartProblem => {
     const parameters = withK(K);
     if ("problem" in parameters) return parameters;
     return {
       state: [u, w],
       parameters,
-      startsAtPeriapsis,
+      atApsis,
+      instant: INSTANT,
       period: 2 * Math.PI,
       ...orbit,
       apsidalAngle: "polar",
@@ -45,15 +46,15 @@ export function startInAngle(
   };
 
   if (start.kind === "state") {
-    const [u, w] = system.variables.map((name) => start.values[name]);
+    const [u, w] = system.states.map((name) => start.values[name]);
     const K = inverse === undefined ? undefined : (start.values[inverse] ?? scenario.parameters[inverse]);
     if (u === undefined || w === undefined || K === undefined) {
-      const wanted = [...system.variables, inverse].join(", ");
+      const wanted = [...system.states, inverse].join(", ");
       return { problem: `a starting state of ${equations.name} needs all of ${wanted}` };
     }
     const orbit = osculating(u, w, K);
     if (!(u > 0 && K > 0 && orbit.eccentricity < 1)) return { problem: UNBOUND };
-    return finish(u, w, K, orbit, Math.abs(w) <= AT_APSIS * u && u > K);
+    return finish(u, w, K, orbit, Math.abs(w) <= AT_APSIS * u);
   }
 
   if (start.inclination !== 0 || start.node !== 0 || start.argumentOfPeriapsis !== 0) {
@@ -78,7 +79,7 @@ export function startInAngle(
       (2 * Math.PI) / STEPS_PER_TURN,
     );
     if (K === null) {
-      return { problem: `no orbit of ${equations.name} turns at both the periapsis and the apoapsis given` };
+      return { problem: noOrbitBetween(equations.name) };
     }
     const orbit = osculating(1 / rp, 0, K);
     // A strong field holds orbits that Newton's would let go: their own turning points then give the size.

@@ -1,20 +1,25 @@
 import { describe, expect, it } from "vitest";
-import { runLedger, type Watched } from "../../src/measure/ledger.js";
+import type { Observable } from "../../src/kernel/observables.js";
+import { runLedger } from "../../src/measure/ledger.js";
 import { runPassages } from "../../src/measure/passages.js";
 import { handLoop, kepler } from "./hand-loop.js";
 import { planarOrbit } from "./scenarios.js";
 
-const watched: readonly Watched[] = [
+const watched: readonly Observable[] = [
   {
     name: "energy",
     truncatedAt: null,
-    value: ([x, y, vx, vy]) => [(vx! * vx! + vy! * vy!) / 2 - 1 / Math.hypot(x!, y!)],
+    value: ({ 0: x, 1: y, 2: vx, 3: vy }) => [(vx! * vx! + vy! * vy!) / 2 - 1 / Math.hypot(x!, y!)],
   },
-  { name: "angular-momentum", truncatedAt: null, value: ([x, y, vx, vy]) => [x! * vy! - y! * vx!] },
+  {
+    name: "angular-momentum",
+    truncatedAt: null,
+    value: ({ 0: x, 1: y, 2: vx, 3: vy }) => [x! * vy! - y! * vx!],
+  },
   {
     name: "eccentricity-vector",
     truncatedAt: null,
-    value: ([x, y, vx, vy]) => {
+    value: ({ 0: x, 1: y, 2: vx, 3: vy }) => {
       const along = vx! * vx! + vy! * vy! - 1 / Math.hypot(x!, y!);
       const across = x! * vx! + y! * vy!;
       return [along * x! - across * vx!, along * y! - across * vy!];
@@ -117,7 +122,7 @@ describe("a ledger entry", () => {
     const step = scenario.period / 16384;
     const run = runPassages(loop, scenario, [1], step);
     // Energy with a term of 1e-6 left out, as a post-Newtonian energy is at the second order.
-    const truncated: Watched = {
+    const truncated: Observable = {
       name: "energy",
       truncatedAt: "(GM/(c^2 a))^2",
       value: (state) => [watched[0]!.value(state)[0]! + 1e-6 / Math.hypot(state[0]!, state[1]!) ** 2],
