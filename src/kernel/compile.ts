@@ -59,7 +59,7 @@ function writeLoop(
     (symbol: string): string =>
       isParameter(symbol) ? plain(symbol) : bind(plain(symbol));
   const write = (into: Code, nodes: readonly Node[], prefix: string, bind: (state: string) => string) =>
-    writeExpressions(into, nodes, prefix, at(bind), hoisted);
+    writeExpressions(into, nodes, prefix, at(bind), new Map(hoisted));
 
   const body = bodyOf(method, {
     coordinates,

@@ -14,7 +14,7 @@ const INFIX: Readonly<Partial<Record<Node["op"], string>>> = {
  *
  * @param prefix makes the names of this place unique; names are generated, never text of a formula
  * @param bind the name that a symbol goes by here
- * @param known nodes that have names already
+ * @param names of the nodes that have one already; those written here are added
  * @returns the names of the expressions' values
  */
 export function writeExpressions(
@@ -22,9 +22,8 @@ export function writeExpressions(
   nodes: readonly Node[],
   prefix: string,
   bind: (symbol: string) => string,
-  known: ReadonlyMap<Node, string> = new Map(),
+  names: Map<Node, string> = new Map(),
 ): string[] {
-  const names = new Map(known);
   return nodes.map((node) =>
     fold<string>(
       node,
@@ -69,7 +68,7 @@ export function hoistParameters(
       constant,
     );
     if (!fixed) for (const argument of node.args) visit(argument);
-    else if (!hoisted.has(node)) hoisted.set(node, writeExpressions(code, [node], "p", bind, hoisted)[0]!);
+    else writeExpressions(code, [node], "p", bind, hoisted);
   };
   for (const node of nodes) visit(node);
   return hoisted;
