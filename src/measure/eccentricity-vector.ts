@@ -6,7 +6,7 @@ import { ioAt, walk } from "./stepping.js";
 
 /** A second reading of the advance, which locates no passage and fits no line. */
 export interface EccentricityDrift {
-  /** rad an orbit of the osculating period. */
+  /** rad an orbit. */
   readonly perOrbit: number;
   /** What the swing of the osculating vector within an orbit can add or take away: all of it, once. */
   readonly halfWidth: number;
@@ -72,6 +72,7 @@ function frameOf(scenario: PreparedScenario, dimension: number): Frame {
  * whole steps nearest to the span. What the equations add to Newton's makes the vector swing within each
  * orbit; the swing is measured over the first orbit and stands in the half-width.
  *
+ * @param orbit length of the orbit that the figure is for: the run's own radial period, where it is known
  * @returns null where the run does not reach the end
  */
 export function eccentricityDrift(
@@ -79,12 +80,13 @@ export function eccentricityDrift(
   scenario: PreparedScenario,
   parameters: readonly number[],
   step: number,
+  orbit: number = scenario.period,
 ): EccentricityDrift | null {
   const frame = frameOf(scenario, loop.dimension);
   const values = Float64Array.from(parameters);
   const io = ioAt(loop, scenario.state);
   const steps = Math.round(nominalLength(scenario) / step);
-  const orbits = (steps * step) / scenario.period;
+  const orbits = (steps * step) / orbit;
   const oneOrbit = Math.min(steps, Math.round(scenario.period / step));
   let last = direction(frame, io, 0);
   let total = 0;

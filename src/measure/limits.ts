@@ -10,8 +10,8 @@ export interface RunLimits {
 
 /**
  * How many times longer than its osculating Newtonian period an orbit may take before the run is cut off.
- * A strong field lengthens the radial period, by a half at a periapsis of 15 GM/c²; an orbit that takes
- * four times as long as it should is no longer the one that was asked for.
+ * A strong field lengthens the orbit, by a fifth in angle at a periapsis of 15 GM/c²; one that takes four
+ * times as long as it should is no longer the orbit that was asked for.
  */
 const PATIENCE = 4;
 
