@@ -1,0 +1,28 @@
+/** A size in a sentence: three significant digits, without an exponent where it reads well. */
+export function size(value: number): string {
+  const magnitude = Math.abs(value);
+  if (magnitude === 0) return "0";
+  if (magnitude >= 1e-3 && magnitude < 1e6) return plain(value, 3);
+  return value.toExponential(2).replace("e+", "e");
+}
+
+/** A figure in a sentence, to the digits that its half-width leaves, and one more. */
+export function figure(value: number, halfWidth: number): string {
+  if (value === 0 || !(halfWidth > 0)) return plain(value, 8);
+  const digits = Math.ceil(Math.log10(Math.abs(value))) - Math.floor(Math.log10(halfWidth)) + 1;
+  return plain(value, Math.min(12, Math.max(3, digits)));
+}
+
+function plain(value: number, digits: number): string {
+  const text = Number(value.toPrecision(digits));
+  const magnitude = Math.abs(text);
+  if (magnitude !== 0 && (magnitude < 1e-6 || magnitude >= 1e12)) return text.toExponential(digits - 1);
+  const decimals = magnitude === 0 ? 0 : Math.max(0, digits - 1 - Math.floor(Math.log10(magnitude)));
+  return text.toFixed(Math.min(decimals, 20));
+}
+
+export const plural = (count: number, noun: string): string => `${count} ${noun}${count === 1 ? "" : "s"}`;
+
+/** Steps an orbit in a sentence. */
+export const steps = (perOrbit: number): string =>
+  `${Number.isInteger(perOrbit) || perOrbit >= 100 ? Math.round(perOrbit) : perOrbit.toPrecision(3)} steps an orbit`;
