@@ -10,6 +10,7 @@ export function ladderResult(
   scenario: PreparedScenario,
   unit: QuotedUnit,
   authors: number | null,
+  subtracted: boolean,
 ): Ladder {
   const { runs, analysis } = ladder;
   const { method } = runs;
@@ -27,7 +28,9 @@ export function ladderResult(
     coefficient: coefficient(ladder, scenario),
     floor: ladder.figure.at(-1)?.floor || null,
     rungs: runs.rungs.map((rung, k): Rung => {
-      const readings = [rung.on, rung.off === rung.on ? null : rung.off].filter((r) => r !== null);
+      // A null run counts where the claim's figure needs it.
+      const needed = subtracted && rung.off !== rung.on ? [rung.on, rung.off] : [rung.on];
+      const readings = needed.filter((reading) => reading !== null);
       return {
         step: rung.step,
         stepsPerOrbit: scenario.period / rung.step,

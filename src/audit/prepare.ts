@@ -35,7 +35,7 @@ export function prepare(claim: Claim): Prepared | { readonly problem: string } {
   const system = compileSystem(equations, recipe);
   const scenario = prepareScenario(
     claim.scenario,
-    { variables: system.states, parameters: system.parameters },
+    { states: system.states, parameters: system.parameters },
     () => loopOf(recipe, findMethod(FINE_METHOD)!),
   );
   if ("problem" in scenario) return scenario;

@@ -1,0 +1,39 @@
+import type { Claim } from "../claim/claim.js";
+import type { ClaimResult } from "../result/result.js";
+import { type Provenance, provenance } from "./provenance.js";
+
+/** The result of a claim that could not be audited: an honest entry with the reason. */
+export function undetermined(
+  file: string,
+  reason: string,
+  origin: Provenance,
+  claim: Pick<Claim, "title" | "claimed"> | null = null,
+): ClaimResult {
+  return {
+    file,
+    title: claim?.title ?? file,
+    verdict: "undetermined",
+    grade: null,
+    digits: null,
+    reason,
+    gradeRule: "Nothing was run, so there is nothing to grade.",
+    claimed: claim && claimedOf(claim.claimed),
+    asSolved: { value: null, null: null, error: null, halfWidth: null },
+    best: { value: null, halfWidth: null, from: null, says: "Nothing was run." },
+    checks: [
+      { name: "reproduces", outcome: "not-checked", figure: null, limit: null, unit: "", says: reason },
+    ],
+    budget: null,
+    ladders: [],
+    ledger: [],
+    remedy: null,
+    setup: null,
+    passages: null,
+    provenance: provenance(origin, 0),
+  };
+}
+
+export function claimedOf(claimed: Claim["claimed"]): NonNullable<ClaimResult["claimed"]> {
+  const { value, halfWidth, baseline, quantity, text, digits } = claimed;
+  return { value, halfWidth, unit: claimed.unit.text, baseline, quantity, text, digits };
+}
