@@ -1,4 +1,4 @@
-import type { Check, CheckName } from "../result/result.js";
+import type { Check, CheckName, Verdict } from "../result/result.js";
 import { MARGIN } from "./checks/common.js";
 import type { Evidence, Grading } from "./evidence.js";
 import { passes } from "./verdict.js";
@@ -9,7 +9,7 @@ const TRUST: readonly CheckName[] = ["converges", "order", "agrees", "sampling"]
 const OPTIONAL: readonly CheckName[] = ["sampling"];
 
 /** The grade of the solution; null for a claim without one. The first rule that applies decides. */
-export function gradeOf(evidence: Evidence, checks: readonly Check[]): Grading {
+export function gradeOf(evidence: Evidence, checks: readonly Check[], verdict: Verdict): Grading {
   const { solution, best } = evidence;
   if (solution === null) return { grade: null, rule: "There is no solution to grade." };
   const failed = checks.filter(({ outcome }) => outcome === "fail").map(({ name }) => name);
@@ -24,6 +24,7 @@ export function gradeOf(evidence: Evidence, checks: readonly Check[]): Grading {
   if (failed.includes("stands-clear")) {
     return { grade: "E", rule: "The effect does not stand clear of the numerical error." };
   }
+  if (verdict === "not-resolved") return { grade: "E", rule: "No digit of the figure stands." };
   if (distrusted.length > 1) return { grade: "E", rule: `${distrusted.join(" and ")} fail.` };
   if (distrusted.length === 1) return { grade: "D", rule: `${distrusted[0]} fails.` };
   const open = checks.filter(({ name, outcome }) => outcome === "not-checked" && !OPTIONAL.includes(name));

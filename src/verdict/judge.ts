@@ -18,7 +18,7 @@ export function judge(evidence: Evidence): Judgement {
   const { best, claimed, solution } = evidence;
   const checks = allChecks(evidence);
   const { verdict, reason } = conclude(evidence, checks);
-  const { grade, rule } = gradeOf(evidence, checks);
+  const { grade, rule } = gradeOf(evidence, checks, verdict);
   const error = solutionError(evidence);
   return {
     verdict,

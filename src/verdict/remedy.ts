@@ -85,9 +85,8 @@ function restate(evidence: Evidence): string | null {
   if (error === null) return null;
   const value = evidence.solution!.value!;
   const halfWidth = TIMES * error.bound;
-  return halfWidth < Math.abs(value) || evidence.best!.value === 0
-    ? `${concise(value, halfWidth)} ${evidence.claimed.unit}`
-    : null;
+  // A value within twice its margin of zero carries no digit.
+  return halfWidth <= Math.abs(value) / 2 ? `${concise(value, halfWidth)} ${evidence.claimed.unit}` : null;
 }
 
 function sentence(

@@ -120,6 +120,9 @@ function partly(
   }
   const count = Math.min(digits, claimed.digits);
   const stand = `${count} of ${plural(claimed.digits, "quoted digit")} ${count === 1 ? "stands" : "stand"}`;
+  if (right && digits >= claimed.digits) {
+    return `The digits stand, but with less to spare than the quoted margin asks: the numerical error of ${how} is up to ${size(error.bound)} ${claimed.unit}, more than a third of it.`;
+  }
   const why = right
     ? `the numerical error of ${how} is up to ${size(error.bound)} ${claimed.unit}, more than a third of the quoted margin`
     : `the claim is ${size(claimed.value - best.value)} ${claimed.unit} off the ${figure(best.value, best.halfWidth)} that the equations give, within the numerical error of ${how}`;

@@ -8,7 +8,8 @@ export function size(value: number): string {
 
 /** A figure in a sentence, to the digits that its half-width leaves, and one more. */
 export function figure(value: number, halfWidth: number): string {
-  if (value === 0 || !(halfWidth > 0)) return plain(value, 8);
+  if (!(halfWidth > 0)) return plain(value, 8);
+  if (Math.abs(value) <= halfWidth) return "0";
   const digits = Math.ceil(Math.log10(Math.abs(value))) - Math.floor(Math.log10(halfWidth)) + 1;
   return plain(value, Math.min(12, Math.max(3, digits)));
 }

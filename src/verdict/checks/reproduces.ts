@@ -7,7 +7,7 @@ import { atMost, check, NO_SOLUTION, notChecked } from "./common.js";
 const SHARE = 4 / 3;
 
 /** The stated method and step give the claimed figure. */
-export function reproduces({ claimed, solution }: Evidence): Check {
+export function reproduces({ claimed, solution, nullExists }: Evidence): Check {
   if (solution === null) return notChecked("reproduces", NO_SOLUTION);
   if (solution.value === null) {
     return check(
@@ -22,7 +22,7 @@ export function reproduces({ claimed, solution }: Evidence): Check {
   const says =
     distance <= limit
       ? `${given}, within ${size(distance)} of the claim.`
-      : `${given}, ${size(distance)} from the claim; ${size(limit)} is allowed.${hint(claimed, solution, limit)}`;
+      : `${given}, ${size(distance)} from the claim; ${size(limit)} is allowed.${nullExists ? hint(claimed, solution, limit) : ""}`;
   return atMost("reproduces", distance, limit, claimed.unit, says);
 }
 
