@@ -22,7 +22,7 @@ export function senseOf(state: ArrayLike<number>, dimension: number): 1 | -1 {
  *
  * @param state x, y, z, vx, vy, vz
  */
-export function fromNode(state: ArrayLike<number>): number {
+function fromNode(state: ArrayLike<number>): number {
   const [x, y, z] = [state[0]!, state[1]!, state[2]!];
   const [vx, vy, vz] = [state[3]!, state[4]!, state[5]!];
   const lx = y * vz - z * vy;

@@ -25,7 +25,7 @@ const STAIRCASE = 0.1;
  * | pattern | when |
  * | --- | --- |
  * | rounding-level | the largest change is within what rounding alone may do (`rounding`) |
- * | bounded-oscillation | the means of the orbits do not grow, or by less than a hundredth of the swing within an orbit |
+ * | bounded-oscillation | the means of the orbits do not grow, or by less than a hundredth of the swing within an orbit, or than rounding may make them |
  * | linear-drift | the means move steadily, t^1 or slower |
  * | faster-growth | as a power of t above 1.25 |
  * | random-walk | their steps forget one another |
@@ -33,7 +33,7 @@ const STAIRCASE = 0.1;
  *
  * @param largest largest relative change over the run
  * @param means orbit by orbit
- * @param swing half the widest swing within an orbit; 0 where that is physical and does not count
+ * @param swing half the widest swing within an orbit, as far as it is numerical
  * @param rounding what rounding may have done over the run
  * @param noise what rounding does in one step
  */
@@ -52,7 +52,8 @@ export function driftOf(
   });
   if (largest <= rounding) return found("rounding-level");
   const range = means.mean.length === 0 ? 0 : Math.max(...means.mean) - Math.min(...means.mean);
-  if (growth.kind === "none" || range <= SECULAR * swing) return found("bounded-oscillation");
+  if (growth.kind === "none" || range <= Math.max(SECULAR * swing, rounding))
+    return found("bounded-oscillation");
   return found(isStaircase(means) ? "jumps-at-periapsis" : PATTERNS[growth.kind], growth.exponent);
 }
 

@@ -23,6 +23,8 @@ const VERY_STRONG = 10;
 const SMOOTH = 1;
 /** A curve that leaves a tenth of the variance unexplained still goes by its power law. */
 const EXPLAINED = 0.9;
+/** Between a series that stays in its bounds (t^0) and a random walk (t^1/2) the half divides. */
+const WALKS = 0.25;
 /** Range of exponents searched, and how finely. */
 const EXPONENTS = [0.1, 4] as const;
 const RESOLUTION = 1e-4;
@@ -78,7 +80,8 @@ export function growthOf(means: readonly number[], noise: number): Growth {
   if (best === "line" || best === "power") return curve();
   if (vonNeumannRatio(steps) < SMOOTH) return 1 - power.squares / spread >= EXPLAINED ? curve() : none;
   if (best === "pulled") return { kind: "linear", slope, exponent: power.exponent };
-  return { kind: "random-walk", slope, exponent: walkExponent(means) };
+  const exponent = walkExponent(means);
+  return exponent < WALKS ? none : { kind: "random-walk", slope, exponent };
 }
 
 /** Few means: a drift is one that never turns back. */
@@ -130,7 +133,7 @@ function vonNeumannRatio(values: readonly number[]): number {
 }
 
 /** Slope of log rms change against log lag, over lags up to a quarter of the series. */
-function walkExponent(means: readonly number[]): number | null {
+function walkExponent(means: readonly number[]): number {
   const lags: number[] = [];
   const sizes: number[] = [];
   for (let lag = 1; lag <= means.length / 4; lag *= 2) {
@@ -138,5 +141,5 @@ function walkExponent(means: readonly number[]): number | null {
     lags.push(Math.log(lag));
     sizes.push(Math.log(squaresAbout(changes, 0) / changes.length) / 2);
   }
-  return fitLine(lags, sizes)?.slope ?? null;
+  return fitLine(lags, sizes)?.slope ?? 0;
 }

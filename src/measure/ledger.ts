@@ -1,13 +1,9 @@
 import type { Observable } from "../kernel/observables.js";
 import type { StepLoop } from "../kernel/step-loop.js";
 import type { DriftPattern, LedgerEntry } from "../result/result.js";
-import { aspectsOf, widestAspect } from "./aspects.js";
-import { conditioningOf } from "./conditioning.js";
-import { driftOf } from "./drift.js";
-import { type OrbitMean, orbitMean } from "./orbit-mean.js";
+import { LedgerBook } from "./ledger-book.js";
 import type { PreparedScenario, Run } from "./run.js";
 import { ioAt, walk } from "./stepping.js";
-import { ThinnedSeries } from "./thinned-series.js";
 
 /** What one run does to one conserved quantity. All changes are relative. */
 export interface LedgerReading {
@@ -25,20 +21,11 @@ export interface LedgerReading {
 
 /** Samples an orbit, evenly, besides one at each passage, where what swings within an orbit peaks. */
 const SAMPLES_PER_ORBIT = 48;
-/** Points kept of each series for the page. */
-const MOST_POINTS = 600;
 /**
- * A quantity below this part of what it is made of has lost half its digits to cancellation: a change
- * relative to itself would tell of rounding.
+ * A truncated quantity swings within an orbit by itself. How much is seen at a step so many times finer,
+ * where the swing that a method of the second order adds is down by 256.
  */
-const NEAR_NOTHING = Math.sqrt(Number.EPSILON);
-/**
- * What rounding may do. The roundings of n steps make a walk, which strays beyond four times its standard
- * deviation once in some 8000 walks. Rounded coefficients push one way instead: by a unit of the increment,
- * and the increments of an orbit add up to 2π times the state.
- */
-const WALK = 4;
-const PUSH = 2 * Math.PI;
+const FINER = 16;
 
 /**
  * Runs a scenario once more, samples what it conserves by whole steps, and says what became of it.
@@ -53,113 +40,34 @@ export function runLedger(
   run: Run,
   quantities: readonly Observable[],
 ): LedgerReading[] {
-  const every = Math.max(1, Math.round(scenario.period / step / SAMPLES_PER_ORBIT));
-  const books = quantities.map((observable) => new Book(observable, scenario, run, step));
   const values = Float64Array.from(parameters);
-  const io = ioAt(loop, scenario.state);
-  const state = io.subarray(0, loop.dimension);
-  const enter = (taken: number): void => {
-    for (const book of books) book.enter(taken * step, state);
+  const books = quantities.map((quantity) => new LedgerBook(loop, quantity, scenario, run, step));
+  const sample = (
+    length: number,
+    steps: number,
+    enter: (taken: number, state: Float64Array) => void,
+  ): void => {
+    const every = Math.max(1, Math.round(scenario.period / length / SAMPLES_PER_ORBIT));
+    const io = ioAt(loop, scenario.state);
+    const state = io.subarray(0, loop.dimension);
+    enter(0, state);
+    for (let taken = 0; taken < steps; ) {
+      const next = Math.min(every, steps - taken);
+      const end = walk(loop, io, values, length, next, (more) => enter(taken + more, state));
+      if (end !== "done") return;
+      taken += next;
+      enter(taken, state);
+    }
   };
-  enter(0);
-  for (let taken = 0; taken < run.steps; ) {
-    const next = Math.min(every, run.steps - taken);
-    if (walk(loop, io, values, step, next, (more) => enter(taken + more)) !== "done") break;
-    taken += next;
-    enter(taken);
+  sample(step, run.steps, (taken, state) => {
+    for (const book of books) book.enter(taken * step, state);
+  });
+  const truncated = books.filter((book) => book.isTruncated);
+  if (truncated.length > 0) {
+    const fine = step / FINER;
+    sample(fine, Math.round(scenario.period / fine), (_, state) => {
+      for (const book of truncated) book.enterOwnSwing(state);
+    });
   }
   return books.map((book) => book.close());
-}
-
-/** The running account of one quantity: keeps one orbit's samples at a time. */
-class Book {
-  readonly #observable: Observable;
-  readonly #period: number;
-  readonly #passages: readonly number[];
-  readonly #steps: number;
-  readonly #start: readonly number[];
-  readonly #scale: number;
-  readonly #nearNothing: boolean;
-  readonly #series: ThinnedSeries;
-  readonly #orbits: OrbitMean[] = [];
-  /** Index of the passage that ends the orbit under way; 0 before the first passage. */
-  #next = 0;
-  #phases: number[] = [];
-  #rows: (readonly number[])[] = [];
-  #last: readonly number[] = [];
-  #largest = 0;
-  #noise = 0;
-
-  constructor(observable: Observable, scenario: PreparedScenario, run: Run, step: number) {
-    this.#observable = observable;
-    this.#period = scenario.period;
-    this.#passages = run.times;
-    this.#steps = run.steps;
-    const state = Float64Array.from(scenario.state);
-    this.#start = observable.value(state);
-    const size = Math.hypot(...this.#start);
-    const { natural } = conditioningOf(observable.value, state);
-    this.#nearNothing = size < NEAR_NOTHING * natural;
-    // A quantity made of nothing at all changes by its own value.
-    this.#scale = (this.#nearNothing ? natural : size) || 1;
-    this.#series = new ThinnedSeries((run.steps * step) / scenario.period, MOST_POINTS);
-  }
-
-  enter(time: number, state: Float64Array): void {
-    const row = this.#observable.value(state).map((value, j) => (value - this.#start[j]!) / this.#scale);
-    const size = Math.hypot(...row);
-    this.#last = row;
-    this.#largest = Math.max(this.#largest, size);
-    this.#series.add(time / this.#period, row.length === 1 ? row[0]! : size);
-    while (this.#next < this.#passages.length && time >= this.#passages[this.#next]!) {
-      this.#closeOrbit();
-      this.#next++;
-    }
-    if (this.#next === 0 || this.#next === this.#passages.length) return;
-    const [from, to] = [this.#passages[this.#next - 1]!, this.#passages[this.#next]!];
-    this.#phases.push((time - from) / (to - from));
-    this.#rows.push(row);
-    if (this.#next === 1) {
-      const { rounding } = conditioningOf(this.#observable.value, state);
-      this.#noise = Math.max(this.#noise, rounding / this.#scale);
-    }
-  }
-
-  #closeOrbit(): void {
-    const mean = orbitMean(this.#phases, this.#rows);
-    if (mean !== null) this.#orbits.push(mean);
-    this.#phases = [];
-    this.#rows = [];
-  }
-
-  /** Where there are no two whole orbits to compare: the start and the end of the run. */
-  #ends(): OrbitMean[] {
-    const rest = { early: null, late: null, swing: 0 };
-    return [
-      { mean: this.#last.map(() => 0), ...rest },
-      { mean: this.#last, ...rest },
-    ];
-  }
-
-  close(): LedgerReading {
-    const { name, truncatedAt } = this.#observable;
-    const start = this.#nearNothing ? null : this.#start.map((value) => value / this.#scale);
-    const aspect = widestAspect(aspectsOf(this.#orbits.length > 1 ? this.#orbits : this.#ends(), start))!;
-    const swing = this.#orbits.reduce((most, orbit) => Math.max(most, orbit.swing), 0);
-    const largest =
-      truncatedAt === null
-        ? this.#largest
-        : aspect.mean.reduce((most, value) => Math.max(most, Math.abs(value - aspect.mean[0]!)), 0);
-    const rounding = this.#noise * (WALK * Math.sqrt(this.#steps) + PUSH * this.#orbits.length);
-    const drift = driftOf(largest, aspect, truncatedAt === null ? swing : 0, rounding, this.#noise);
-    const points = this.#series.points();
-    return {
-      quantity: name,
-      largest,
-      ...drift,
-      relativeTo: this.#nearNothing ? "parts" : "start",
-      truncatedAt,
-      series: { orbits: points.map(({ x }) => x), change: points.map(({ y }) => y) },
-    };
-  }
 }

@@ -27,7 +27,7 @@ export function planarOrbit(
 }
 
 /** Eccentric anomaly from Kepler's equation M = E - e sin E, by Newton's method from above. */
-export function eccentricAnomaly(M: number, e: number): number {
+function eccentricAnomaly(M: number, e: number): number {
   let E = M + e;
   for (let i = 0; i < 100; i++) {
     const step = (E - e * Math.sin(E) - M) / (1 - e * Math.cos(E));
