@@ -13,6 +13,7 @@ import { runLedger } from "../../src/measure/ledger.js";
 import { runPassages } from "../../src/measure/passages.js";
 import { isPlanar, openParameters, prepareScenario } from "../../src/measure/start.js";
 import { findMethod, methodsCatalog } from "../../src/methods/catalog/index.js";
+import { handLoop, postNewtonian } from "./hand-loop.js";
 import { ARCSEC, CENTURY, keplerState } from "./scenarios.js";
 
 interface Given {
@@ -178,6 +179,35 @@ describe("the advance", () => {
     expect(Math.abs(drift.perOrbit - perOrbit)).toBeLessThan(drift.halfWidth);
     expect(drift.halfWidth / perOrbit).toBeLessThan(0.1);
   });
+});
+
+describe("exact turning points", () => {
+  it.each([
+    [5000, 0],
+    [30, 0.4],
+    [12, 1],
+  ])(
+    "in time, c = %f, are reached by an integration that shares nothing with the search",
+    (c, inclination) => {
+      const orbit = bench({
+        equations: "post-newtonian-1",
+        parameters: { GM: 1, c },
+        start: { turningPoints: true, inclination, argumentOfPeriapsis: 0.7 },
+        orbits: 4,
+      });
+      const { made } = orbit;
+      const hand = handLoop("rk4", made.state.length, postNewtonian);
+      const parameters = [1, c];
+      const found = runPassages(hand, made, parameters, made.period / 8192);
+      for (const r of found.distances) expect(Math.abs(r / 0.7 - 1)).toBeLessThan(1e-11);
+      // The motion is the same forwards and backwards from an apsis: half a radial period on lies the other.
+      const half = apsidalAdvance(found)!.radialPeriod / 2;
+      const apoapsis = stateAfter(hand, made, parameters, half / 8192, 8192);
+      if (apoapsis.status !== "done") throw new Error(apoapsis.status);
+      const position = apoapsis.state.slice(0, made.state.length / 2);
+      expect(Math.abs(Math.hypot(...position) / 1.3 - 1)).toBeLessThan(1e-11);
+    },
+  );
 });
 
 describe("a run of every method", () => {
