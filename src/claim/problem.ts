@@ -1,0 +1,31 @@
+/** Something wrong in a claim file: where, what was found, what would be right. */
+export interface Problem {
+  readonly file: string;
+  /** From 1; null where the file as a whole is meant. */
+  readonly line: number | null;
+  readonly column: number | null;
+  /** Where in the claim, such as `scenario.start.periapsis`; empty for the file as a whole. */
+  readonly path: string;
+  readonly found: string;
+  readonly wanted: string;
+}
+
+/** One line: `file:line:column: path: found ..., wanted ...`. */
+export function formatProblem({ file, line, column, path, found, wanted }: Problem): string {
+  const place = line === null ? file : `${file}:${line}:${column}`;
+  return `${place}: ${path === "" ? "" : `${path}: `}found ${found}; wanted ${wanted}`;
+}
+
+const LONGEST_ECHO = 60;
+
+/** Untrusted text as it may be shown: on one line, without control characters, not too long, in quotes. */
+export function echo(value: unknown): string {
+  if (value === undefined) return "nothing";
+  if (value === null) return "nothing";
+  if (Array.isArray(value)) return "a list";
+  if (typeof value === "object") return "a block of keys";
+  const text = String(value).replaceAll(/[\p{Cc}\p{Cf}\u2028\u2029]+/gu, " ");
+  const characters = [...text];
+  const shown = characters.length > LONGEST_ECHO ? `${characters.slice(0, LONGEST_ECHO).join("")}…` : text;
+  return `'${shown}'`;
+}
