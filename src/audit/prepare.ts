@@ -2,7 +2,7 @@ import type { Claim } from "../claim/claim.js";
 import { appliesTo } from "../kernel/applies-to.js";
 import { type CompiledSystem, compileSystem } from "../kernel/system.js";
 import type { PreparedScenario } from "../measure/run.js";
-import { isPlanar, prepareScenario } from "../measure/start.js";
+import { isPlanar, openParameters, prepareScenario } from "../measure/start.js";
 import { findMethod } from "../methods/catalog/index.js";
 import type { MethodDefinition } from "../methods/definition.js";
 import type { SystemRecipe } from "./job.js";
@@ -24,20 +24,14 @@ const FINE_METHOD = "dormand-prince-8";
 
 /** @returns why the claim cannot be run, in a sentence, where it cannot */
 export function prepare(claim: Claim): Prepared | { readonly problem: string } {
-  const { equations, parameters } = claim.scenario;
+  const { equations } = claim.scenario;
   const recipe: SystemRecipe = {
     definition: equations,
-    parameters: Object.keys(equations.parameters).filter(
-      (name) => name in parameters || equations.parameters[name]!.fromStart !== undefined,
-    ),
+    parameters: openParameters(claim.scenario),
     planar: isPlanar(claim.scenario),
   };
   const system = compileSystem(equations, recipe);
-  const scenario = prepareScenario(
-    claim.scenario,
-    { states: system.states, parameters: system.parameters },
-    () => loopOf(recipe, findMethod(FINE_METHOD)!),
-  );
+  const scenario = prepareScenario(claim.scenario, system, () => loopOf(recipe, findMethod(FINE_METHOD)!));
   if ("problem" in scenario) return scenario;
 
   const authors = claim.solution?.method ?? null;

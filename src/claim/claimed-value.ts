@@ -3,7 +3,7 @@ import type { QuotedUnit } from "./claim.js";
 import { nearestDouble } from "./exact.js";
 import { nearest } from "./nearest.js";
 import { echo } from "./problem.js";
-import { exactDecimal, type Misreading } from "./quantity.js";
+import { type Misreading, sensibleDecimal } from "./quantity.js";
 import { namedUnit, unitsCatalog } from "./units.js";
 
 /** A quoted figure: value and margin in the quoted unit. */
@@ -52,12 +52,14 @@ export function parseClaimedValue(input: unknown): QuotedValue | Misreading {
   const unit = parseQuotedUnit(unitText);
   if ("found" in unit) return unit;
 
-  const value = exactDecimal(mantissa + exponent);
-  const lastDigit = exactDecimal(`1e${-decimals(mantissa)}`)?.mul(exactDecimal(`1${exponent || "e0"}`) ?? 0);
+  const value = sensibleDecimal(mantissa + exponent);
+  const lastDigit = sensibleDecimal(`1e${-decimals(mantissa)}`)?.mul(
+    sensibleDecimal(`1${exponent || "e0"}`) ?? 0,
+  );
   const halfWidth = concise
     ? lastDigit?.mul(concise[2]!)
     : plusMinus
-      ? exactDecimal(plusMinus[3]!)
+      ? sensibleDecimal(plusMinus[3]!)
       : lastDigit?.div(2);
   if (value === null || halfWidth === undefined || halfWidth === null || lastDigit?.equals(0)) {
     return { found: echo(input), wanted: "a figure of a sensible size" };

@@ -1,4 +1,5 @@
-import Fraction from "fraction.js";
+import type Fraction from "fraction.js";
+import { exactDecimal } from "../formula/decimal.js";
 import { nearestDouble } from "./exact.js";
 import { nearest } from "./nearest.js";
 import { echo } from "./problem.js";
@@ -24,11 +25,11 @@ const NUMBER = /^\s*([+\-−]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(.*?)\s*$/
 const LARGEST_EXPONENT = 60;
 
 /** A decimal as an exact fraction; null when it is too large or too small to mean anything. */
-export function exactDecimal(text: string): Fraction | null {
+export function sensibleDecimal(text: string): Fraction | null {
   const plain = text.replace("−", "-");
   const exponent = Number(/[eE]([+-]?\d+)$/.exec(plain)?.[1] ?? 0);
   if (Math.abs(exponent) > LARGEST_EXPONENT || plain.length > 100) return null;
-  return new Fraction(plain);
+  return exactDecimal(plain);
 }
 
 /**
@@ -64,7 +65,7 @@ export function parseQuantity(input: unknown, wanted: string): Quantity | Misrea
           wanted: wanted === "1" ? "no unit: a pure number" : `a unit of ${wanted}`,
         };
   }
-  const exact = exactDecimal(number);
+  const exact = sensibleDecimal(number);
   if (exact === null)
     return { found: echo(input), wanted: `a size between 1e-${LARGEST_EXPONENT} and 1e${LARGEST_EXPONENT}` };
   const pi = Math.PI ** unit.pi;

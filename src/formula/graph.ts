@@ -1,4 +1,5 @@
 import Fraction from "fraction.js";
+import { exactDecimal } from "./decimal.js";
 
 /** Functions that a formula may call. Each can be differentiated. */
 export const functionNames = [
@@ -70,9 +71,9 @@ export class Graph {
     return this.#nodes.size;
   }
 
-  /** @param value a whole number, a decimal as text such as "0.1" or "1e-3", or a fraction */
+  /** @param value a whole number, a decimal as text such as "0.1" or "1e-3" */
   number(value: number | string | Fraction): Node {
-    return this.#intern("number", [], new Fraction(value));
+    return this.#intern("number", [], typeof value === "string" ? exactDecimal(value) : new Fraction(value));
   }
 
   symbol(name: string): Node {
