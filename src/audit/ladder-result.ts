@@ -74,7 +74,7 @@ function sentence({ runs, analysis }: AnalysedLadder, scenario: PreparedScenario
     return `The error falls by ${factor} for each halving from ${perOrbit(window[0])} to ${perOrbit(window[1])} steps an orbit: order ${order.toFixed(2)}.`;
   }
   if (analysis.shape === "at-rounding" && window !== null) {
-    return `From ${perOrbit(window[0])} steps an orbit on the figure changes by no more than rounding.`;
+    return `From ${perOrbit(window[0])} steps an orbit on every halving shrinks the change, down to rounding.`;
   }
   return SHAPES[analysis.shape];
 }

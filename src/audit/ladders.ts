@@ -3,7 +3,7 @@ import { type Difference, isClear, type LadderPoint } from "../convergence/diffe
 import { analyseLadder, type LadderAnalysis } from "../convergence/ladder.js";
 import { roundingHalfWidth } from "../convergence/rounding.js";
 import { type StateOrder, stateOrder } from "../convergence/state-order.js";
-import { stateDistance } from "../measure/early-state.js";
+import { EARLY_ORBITS, stateDistance } from "../measure/early-state.js";
 import type { PreparedScenario } from "../measure/run.js";
 import { figureOf } from "./figure.js";
 import type { Reading } from "./job.js";
@@ -122,6 +122,12 @@ function subtractedAnalysis(
   return { shape: raw.shape, order: raw.order, orderInterval: raw.orderInterval, window, limit };
 }
 
+/**
+ * Rounded coefficients push every step, and every member of an ensemble, the same way: by a unit of the last
+ * place of the increments of coordinates and rates, which add up to 2π times the state in each orbit.
+ */
+const PUSH = 2 * 2 * Math.PI * EARLY_ORBITS * Number.EPSILON;
+
 /** Distances of successive early states, the finer ones included. */
 function distances(runs: MethodRuns, scenario: PreparedScenario): Difference[] {
   const states = [...runs.rungs.map((rung) => rung.early), ...runs.finerEarly];
@@ -139,7 +145,7 @@ function distances(runs: MethodRuns, scenario: PreparedScenario): Difference[] {
       continue;
     }
     const value = stateDistance(scenario, coarse, fine);
-    const noise = spread * Math.max(1, 2 ** ((rung + 1 - runs.ensemble.rung) / 2));
+    const noise = Math.hypot(PUSH, spread * Math.max(1, 2 ** ((rung + 1 - runs.ensemble.rung) / 2)));
     result.push({ rung, value, noise, clear: isClear(value, noise) });
   }
   return result;

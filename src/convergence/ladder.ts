@@ -1,5 +1,5 @@
 import type { LadderShape } from "../result/result.js";
-import { type LadderPoint, successiveDifferences } from "./differences.js";
+import { type Difference, type LadderPoint, successiveDifferences } from "./differences.js";
 import {
   boundIrregular,
   type Estimate,
@@ -17,12 +17,26 @@ export interface LadderAnalysis {
   readonly order: number | null;
   readonly orderInterval: readonly [number, number] | null;
   /**
-   * First and last rung over which the error law is known: the agreeing rungs of an asymptotic ladder, the
-   * flat ones of a ladder at rounding.
+   * First and last rung over which the ladder is known to converge: the agreeing rungs of an asymptotic
+   * ladder; of one at rounding the flat rungs and those that sink to them.
    */
   readonly window: readonly [number, number] | null;
   /** The limit of vanishing step; null when the ladder does not bound it. */
   readonly limit: Estimate | null;
+}
+
+/**
+ * The coarsest rung from which every halving shrinks the difference to a half or less, the slowest that any
+ * order does, until all is rounding. A figure of high order often gets there before its exponents settle.
+ */
+function firstSinking(differences: readonly Difference[]): number {
+  let first = differences.length - flatDifferences(differences).length;
+  while (first > 0) {
+    const [coarse, fine] = [differences[first - 1]!, differences[first]!];
+    if (!coarse.clear || Math.abs(coarse.value) < 2 * Math.abs(fine.value)) break;
+    first--;
+  }
+  return differences[first]!.rung;
 }
 
 /**
@@ -48,10 +62,9 @@ export function analyseLadder(rungs: readonly LadderPoint[]): LadderAnalysis {
   const unknown = { shape, order: null, orderInterval: null, window: null };
   switch (shape) {
     case "at-rounding": {
-      const flat = flatDifferences(differences);
       return {
         ...unknown,
-        window: [flat[0]!.rung, points.length - 1],
+        window: [firstSinking(differences), points.length - 1],
         limit: extrapolateFlat(points, differences),
       };
     }

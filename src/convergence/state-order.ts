@@ -14,6 +14,9 @@ export interface StateOrder {
 /** State exponents wander before they settle: only the finest few differences count. */
 const FINEST = 4;
 
+/** How far the next term of the expansion may bend log2 of a difference: it fades by half a rung or faster. */
+const nextTerm = (rungsAbove: number): number => 2 ** (rungsAbove - FINEST);
+
 /**
  * Fits the order on the finest rungs above the rounding floor.
  *
@@ -32,6 +35,7 @@ export function stateOrder(distances: readonly Difference[]): StateOrder | null 
   const line = fitLine(
     used.map((d) => -d.rung),
     used.map((d) => Math.log2(d.value)),
+    used.map((d) => 1 / (nextTerm(used.at(-1)!.rung - d.rung) ** 2 + (d.noise / d.value / Math.LN2) ** 2)),
   )!;
   const half = line.slopeError === null ? null : studentT95(line.degrees) * line.slopeError;
   return {

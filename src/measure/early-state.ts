@@ -7,7 +7,7 @@ import { ioAt, type WalkEnd, walk } from "./stepping.js";
  * method and not yet a whole phase; and away from both apsides, since at a whole orbit or a half the leading
  * error of a method that is conjugate to a better one (symplectic-euler to leapfrog) comes back to nothing.
  */
-const EARLY_ORBITS = 1.3;
+export const EARLY_ORBITS = 1.3;
 
 /** The whole number of coarsest steps nearest to the early time: every halved rung meets it exactly. */
 export function earlySteps(coarsestStep: number, period: number): number {

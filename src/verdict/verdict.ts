@@ -1,7 +1,7 @@
 import type { Check, CheckName } from "../result/result.js";
 import { standingDigits } from "./digits.js";
 import { type Conclusion, type Evidence, type SolutionError, solutionError } from "./evidence.js";
-import { figure, plural, size, steps } from "./words.js";
+import { bestInWords, plural, size, steps } from "./words.js";
 
 /** A verdict of resolved asks for each of these. */
 const NEEDED: readonly CheckName[] = ["converges", "order", "agrees", "stands-clear"];
@@ -56,7 +56,7 @@ function undetermined(evidence: Evidence, outcome: Lookup): Conclusion | null {
 /** For a claim without a solution: whether the figure is right, and what would have carried it. */
 function textOnly({ claimed, best }: Decidable): string {
   const distance = Math.abs(claimed.value - best.value);
-  const value = `${figure(best.value, best.halfWidth)} ${claimed.unit}`;
+  const value = `${bestInWords(best, claimed)} ${claimed.unit}`;
   const right = distance <= claimed.halfWidth + best.halfWidth;
   return right
     ? `The figure is right, the equations give ${value}; but the claim does not say how it was computed, so nothing shows that the solution carries it.`
@@ -69,7 +69,7 @@ function decide(evidence: Decidable, outcome: Lookup, error: SolutionError | nul
   const distance = Math.abs(claimed.value - best.value);
   const third = claimed.halfWidth / 3;
   const how = `${solution.method} at ${steps(solution.stepsPerOrbit)}`;
-  const value = `${figure(best.value, best.halfWidth)} ${unit}`;
+  const value = `${bestInWords(best, claimed)} ${unit}`;
 
   if (error === null) {
     const ended = solution.status === "ok" ? solution.nullStatus : solution.status;
@@ -97,11 +97,17 @@ function decide(evidence: Decidable, outcome: Lookup, error: SolutionError | nul
       reason: `All ${plural(claimed.digits, "quoted digit")} stand: the numerical error of ${how} is at most ${size(error.bound)} ${unit}, and a third of the quoted margin is ${size(third)}.`,
     };
   }
-  const digits = standingDigits(best.value, error.bound, distance) ?? 0;
+  const digits = digitsLeft(evidence, error.bound, distance);
   if (passes(outcome("stands-clear")) && digits >= 1) {
     return { verdict: "partly-resolved", reason: partly(evidence, error, { right, digits, failing, how }) };
   }
   return { verdict: "not-resolved", reason: lost(evidence, error, how, value) };
+}
+
+/** Digits that stand; of a claim that contains zero, which has none to count, whether it holds at all. */
+function digitsLeft({ claimed, best }: Decidable, error: number, distance: number): number {
+  if (Math.abs(claimed.value) > claimed.halfWidth) return standingDigits(best.value, error, distance) ?? 0;
+  return error + distance <= claimed.halfWidth ? claimed.digits : 0;
 }
 
 function partly(
@@ -125,7 +131,7 @@ function partly(
   }
   const why = right
     ? `the numerical error of ${how} is up to ${size(error.bound)} ${claimed.unit}, more than a third of the quoted margin`
-    : `the claim is ${size(claimed.value - best.value)} ${claimed.unit} off the ${figure(best.value, best.halfWidth)} that the equations give, within the numerical error of ${how}`;
+    : `the claim is ${size(claimed.value - best.value)} ${claimed.unit} off the ${bestInWords(best, claimed)} that the equations give, within the numerical error of ${how}`;
   return `${stand}: ${why}.`;
 }
 

@@ -22,6 +22,14 @@ function plain(value: number, digits: number): string {
   return text.toFixed(Math.min(decimals, 20));
 }
 
+/** The best value to the digits that it has, or as many as it takes to compare it with the claim. */
+export function bestInWords(
+  best: { readonly value: number; readonly halfWidth: number },
+  claimed: { readonly halfWidth: number },
+): string {
+  return figure(best.value, Math.max(best.halfWidth, claimed.halfWidth / 20));
+}
+
 export const plural = (count: number, noun: string): string => `${count} ${noun}${count === 1 ? "" : "s"}`;
 
 /** Steps an orbit in a sentence. */

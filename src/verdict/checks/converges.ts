@@ -12,7 +12,7 @@ export function converges({ solution, ladders }: Evidence): Check {
   }
   const from = rungs[window[0]]!.stepsPerOrbit;
   const inside = solution.rung >= window[0];
-  const regime = shape === "at-rounding" ? "The figure is down to rounding" : "The figure converges";
+  const regime = shape === "at-rounding" ? "The figure sinks to rounding" : "The figure converges";
   const sentence = inside
     ? `${regime} from ${steps(from)} on; the author's ${Math.round(solution.stepsPerOrbit)} is inside.`
     : `${regime} only from ${steps(from)} on; the author's ${Math.round(solution.stepsPerOrbit)} is coarser.`;

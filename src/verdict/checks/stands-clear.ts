@@ -1,6 +1,6 @@
 import type { Check } from "../../result/result.js";
 import { type Evidence, solutionError } from "../evidence.js";
-import { figure, size } from "../words.js";
+import { bestInWords, size } from "../words.js";
 import { check, NO_BEST, NO_SOLUTION, notChecked } from "./common.js";
 
 /** The effect must be so many times the numerical error. */
@@ -21,7 +21,7 @@ export function standsClear(evidence: Evidence): Check {
   const clear = effect >= limit;
   const ratio = effect / error.bound;
   const says = clear
-    ? `The effect, ${figure(effect, best.halfWidth)} ${claimed.unit}, is ${size(ratio)} times the numerical error.`
-    : `The effect, ${figure(effect, best.halfWidth)} ${claimed.unit}, is only ${size(ratio)} times the numerical error, ${size(error.bound)}; ${TIMES} are asked.`;
+    ? `The effect, ${bestInWords(best, claimed)} ${claimed.unit}, is ${size(ratio)} times the numerical error.`
+    : `The effect, ${bestInWords(best, claimed)} ${claimed.unit}, is only ${size(ratio)} times the numerical error, ${size(error.bound)}; ${TIMES} are asked.`;
   return check("stands-clear", clear ? "pass" : "fail", says, effect, limit, claimed.unit);
 }
