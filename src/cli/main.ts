@@ -1,0 +1,8 @@
+#!/usr/bin/env node
+import { tellFailure } from "./failure.js";
+import { tameStreams } from "./output.js";
+import { run } from "./program.js";
+
+tameStreams();
+process.on("uncaughtException", tellFailure);
+await run(process.argv.slice(2)).catch(tellFailure);
