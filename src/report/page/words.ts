@@ -1,0 +1,24 @@
+import type { BudgetPart, Outcome, Verdict } from "../../result/result.js";
+
+export const VERDICT_TITLES: Readonly<Record<Verdict, string>> = {
+  resolved: "Resolved",
+  "partly-resolved": "Partly resolved",
+  "not-resolved": "Not resolved",
+  contradicted: "Contradicted",
+  undetermined: "Undetermined",
+};
+
+export const OUTCOME_TITLES: Readonly<Record<Outcome, string>> = {
+  pass: "passes",
+  caution: "passes, with caution",
+  fail: "fails",
+  "not-checked": "not checked",
+};
+
+export const BUDGET_WORDS: Readonly<Record<BudgetPart, string>> = {
+  truncation: "truncation",
+  rounding: "rounding",
+  readingOff: "reading-off",
+  methodSpread: "method spread",
+  sampling: "sampling",
+};
