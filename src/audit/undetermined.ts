@@ -1,4 +1,6 @@
 import type { Claim } from "../claim/claim.js";
+import { formatProblem } from "../claim/problem.js";
+import type { ReadOutcome } from "../claim/read.js";
 import type { ClaimResult } from "../result/result.js";
 import { type Provenance, provenance } from "./provenance.js";
 
@@ -36,4 +38,10 @@ export function undetermined(
 export function claimedOf(claimed: Claim["claimed"]): NonNullable<ClaimResult["claimed"]> {
   const { value, halfWidth, baseline, quantity, text, digits } = claimed;
   return { value, halfWidth, unit: claimed.unit.text, baseline, quantity, text, digits };
+}
+
+/** The entry of a file that holds no claim that can be read, with what is wrong with it. */
+export function unreadable({ file, problems, sha256 }: Extract<ReadOutcome, { ok: false }>): ClaimResult {
+  const reason = problems.map(formatProblem).join("; ");
+  return undetermined(file, `The claim could not be read: ${reason}.`, { file, sha256 });
 }

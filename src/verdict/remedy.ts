@@ -1,7 +1,7 @@
 import type { Ladder, Remedy, RemedyOption } from "../result/result.js";
+import { size } from "../result/words.js";
 import { type Evidence, solutionError } from "./evidence.js";
 import { concise } from "./quote.js";
-import { size } from "./words.js";
 
 /** The margin that a quote needs for its numerical error: a claim is carried by a third of it. */
 const TIMES = 3;

@@ -1,7 +1,7 @@
 import type { Check, CheckName } from "../result/result.js";
+import { bestInWords, plural, size, steps } from "../result/words.js";
 import { standingDigits } from "./digits.js";
 import { type Conclusion, type Evidence, type SolutionError, solutionError } from "./evidence.js";
-import { bestInWords, plural, size, steps } from "./words.js";
 
 /** A verdict of resolved asks for each of these. */
 const NEEDED: readonly CheckName[] = ["converges", "order", "agrees", "stands-clear"];

@@ -1,38 +1,32 @@
-import { readdirSync, readFileSync } from "node:fs";
+import { readFile } from "node:fs/promises";
 import Handlebars from "handlebars";
 
-/** The package's templates lie three folders up, whether this runs from src or from dist. */
-const FOLDER = new URL("../../../templates/", import.meta.url);
+type Template = (context: object) => string;
 
-type Template = (model: object) => string;
+const folder = new URL("../../../templates/", import.meta.url);
+const compiled = new Map<string, Promise<Template>>();
+const handlebars = Handlebars.create();
+handlebars.registerHelper("isMeasured", (basis: string) => basis === "measured");
 
-let compiled: ReadonlyMap<string, Template> | null = null;
+const PARTIALS = ["style", "plot", "notice"];
+let partials: Promise<void> | undefined;
 
-/**
- * Fills a template of the package. Every value is escaped; a value that the template asks for and the model
- * does not have is a defect, not an empty place.
- *
- * @param name without `.hbs`
- */
-export function fill(name: string, model: object): string {
-  compiled ??= compileAll();
-  const template = compiled.get(name);
-  if (template === undefined) throw new Error(`there is no template '${name}'`);
-  return template(model);
+/** A page's template, compiled once. Everything in it is escaped but SVG of our own. */
+export function template(name: string): Promise<Template> {
+  let ready = compiled.get(name);
+  if (ready === undefined) {
+    ready = compile(name);
+    compiled.set(name, ready);
+  }
+  return ready;
 }
 
-/** Every template is a partial of every other. */
-function compileAll(): ReadonlyMap<string, Template> {
-  const handlebars = Handlebars.create();
-  const names = readdirSync(FOLDER)
-    .filter((file) => file.endsWith(".hbs"))
-    .map((file) => file.slice(0, -4));
-  return new Map(
-    names.map((name) => {
-      const source = readFileSync(new URL(`${name}.hbs`, FOLDER), "utf8");
-      const template = handlebars.compile(source, { strict: true });
-      handlebars.registerPartial(name, template);
-      return [name, template];
-    }),
-  );
+async function compile(name: string): Promise<Template> {
+  partials ??= (async () => {
+    for (const partial of PARTIALS) handlebars.registerPartial(partial, await read(partial));
+  })();
+  await partials;
+  return handlebars.compile(await read(name), { strict: true });
 }
+
+const read = (name: string): Promise<string> => readFile(new URL(`${name}.hbs`, folder), "utf8");

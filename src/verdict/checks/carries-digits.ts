@@ -1,6 +1,6 @@
 import type { Check } from "../../result/result.js";
+import { size, steps } from "../../result/words.js";
 import { type Evidence, solutionError } from "../evidence.js";
-import { size, steps } from "../words.js";
 import { atMost, check, NO_BEST, NO_SOLUTION, notChecked } from "./common.js";
 
 /** The numerical error is at most a third of the margin that the author stands behind. */

@@ -1,6 +1,6 @@
 import type { Check, DriftPattern, LedgerEntry } from "../../result/result.js";
+import { size } from "../../result/words.js";
 import type { Evidence } from "../evidence.js";
-import { size } from "../words.js";
 import { atMost, check, NO_BEST, NO_SOLUTION, notChecked } from "./common.js";
 
 /** The eccentricity vector turns with the apsis: its drift is the figure's own error, seen by other checks. */

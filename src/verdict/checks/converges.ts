@@ -1,6 +1,6 @@
 import type { Check } from "../../result/result.js";
+import { steps } from "../../result/words.js";
 import type { Evidence } from "../evidence.js";
-import { steps } from "../words.js";
 import { check, NO_SOLUTION, notChecked } from "./common.js";
 
 /** A window exists and the author's step lies in it or finer. */

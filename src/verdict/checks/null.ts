@@ -1,6 +1,6 @@
 import type { Check } from "../../result/result.js";
+import { size } from "../../result/words.js";
 import type { Evidence } from "../evidence.js";
-import { size } from "../words.js";
 import { atMost, check, NO_SOLUTION, notChecked } from "./common.js";
 
 /** Far below the margin: a tenth of it. */

@@ -1,6 +1,6 @@
 import type { Check } from "../../result/result.js";
+import { figure, size, steps } from "../../result/words.js";
 import type { Evidence, SolutionEvidence } from "../evidence.js";
-import { figure, size, steps } from "../words.js";
 import { atMost, check, NO_SOLUTION, notChecked } from "./common.js";
 
 /** The figure as quoted may be rounded (half a unit) from one computed within the margin's third. */

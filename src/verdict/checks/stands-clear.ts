@@ -1,6 +1,6 @@
 import type { Check } from "../../result/result.js";
+import { bestInWords, size } from "../../result/words.js";
 import { type Evidence, solutionError } from "../evidence.js";
-import { bestInWords, size } from "../words.js";
 import { check, NO_BEST, NO_SOLUTION, notChecked } from "./common.js";
 
 /** The effect must be so many times the numerical error. */

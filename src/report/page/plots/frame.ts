@@ -6,7 +6,7 @@ type PlotOptions = PlotModule.PlotOptions;
 /** The plotting library and a document to draw in: loaded when the first page is made. */
 export interface Canvas {
   readonly plot: Plot;
-  readonly document: Document;
+  readonly document: NonNullable<PlotOptions["document"]>;
 }
 
 let loaded: Promise<Canvas> | undefined;
@@ -14,7 +14,10 @@ let loaded: Promise<Canvas> | undefined;
 export function canvas(): Promise<Canvas> {
   loaded ??= (async () => {
     const [plot, { parseHTML }] = await Promise.all([import("@observablehq/plot"), import("linkedom")]);
-    return { plot, document: parseHTML("<html><body></body></html>").document as unknown as Document };
+    return {
+      plot,
+      document: parseHTML("<html><body></body></html>").document as unknown as Canvas["document"],
+    };
   })();
   return loaded;
 }

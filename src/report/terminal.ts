@@ -1,0 +1,206 @@
+import { styleText } from "node:util";
+import type { Check, ClaimResult, Ladder, Outcome, Rung, Verdict } from "../result/result.js";
+import { figure, size } from "../result/words.js";
+import { clean, columns, cut, padEnd, padStart, wrap } from "./text.js";
+
+export interface TerminalOptions {
+  /** Columns that no line exceeds; at least 40. */
+  readonly width: number;
+  readonly colour: boolean;
+  /** Where the page is, if there is one. */
+  readonly page?: string;
+}
+
+type Style = Parameters<typeof styleText>[0];
+type Paint = (style: Style, text: string) => string;
+
+export const VERDICT_WORDS: Readonly<Record<Verdict, string>> = {
+  resolved: "RESOLVED",
+  "partly-resolved": "PARTLY RESOLVED",
+  "not-resolved": "NOT RESOLVED",
+  contradicted: "CONTRADICTED",
+  undetermined: "UNDETERMINED",
+};
+
+/** Colour says again what the word says. */
+const VERDICT_STYLES: Readonly<Record<Verdict, Style>> = {
+  resolved: ["bold", "green"],
+  "partly-resolved": ["bold", "yellow"],
+  "not-resolved": ["bold", "red"],
+  contradicted: ["bold", "red"],
+  undetermined: ["bold"],
+};
+
+const OUTCOME_WORDS: Readonly<Record<Outcome, string>> = {
+  pass: "passes",
+  caution: "caution",
+  fail: "fails",
+  "not-checked": "unchecked",
+};
+
+const OUTCOME_STYLES: Readonly<Record<Outcome, Style>> = {
+  pass: "green",
+  caution: "yellow",
+  fail: "red",
+  "not-checked": "dim",
+};
+
+/** The result of one claim: the conclusion, then why, then the numbers. */
+export function renderTerminal(result: ClaimResult, options: TerminalOptions): string {
+  const { width } = options;
+  const paint: Paint = options.colour
+    ? (style, text) => styleText(style, text, { validateStream: false })
+    : (_, text) => text;
+  const sections = [
+    heading(result, width, paint),
+    wrap(clean(result.reason), width),
+    figures(result, width),
+    checks(result.checks, width, paint),
+    ladder(result, width, paint),
+    remedy(result, width),
+    footer(result, options),
+  ];
+  return `${sections
+    .filter((lines) => lines.length > 0)
+    .map((lines) => lines.join("\n"))
+    .join("\n\n")}\n`;
+}
+
+/** `k of n quoted digits stand`, or nothing where that cannot be said. */
+export function digitsInWords({ digits, claimed, verdict }: ClaimResult): string {
+  if (digits === null || claimed === null || Math.abs(claimed.value) <= claimed.halfWidth) return "";
+  if (verdict === "undetermined") return "";
+  const stand = Math.min(digits, claimed.digits);
+  return `${stand} of ${claimed.digits} quoted digits stand${stand === 1 ? "s" : ""}`;
+}
+
+function heading(result: ClaimResult, width: number, paint: Paint): string[] {
+  const word = VERDICT_WORDS[result.verdict];
+  const grade = result.grade === null ? "" : `grade ${result.grade}`;
+  const rest = [grade, digitsInWords(result)].filter(Boolean).join("   ");
+  return [
+    `${paint(VERDICT_STYLES[result.verdict], word)}${rest === "" ? "" : `   ${rest}`}`,
+    cut(clean(result.title), width),
+    ...(result.title === result.file ? [] : [paint("dim", cut(clean(result.file), width))]),
+  ];
+}
+
+function figures({ claimed, asSolved, best, setup }: ClaimResult, width: number): string[] {
+  if (claimed === null) return [];
+  const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
+  const number = (value: number | null): string => (value === null ? "none" : figure(value, fine));
+  const baseline = claimed.baseline === "subtracted" ? "less its null run" : "baseline included";
+  const how =
+    setup?.method == null
+      ? "no solution given"
+      : `${setup.method.name}, ${clean(setup.step ?? "")}${/orbit/.test(setup.step ?? "") ? "" : ` (${Math.round(setup.stepsPerOrbit ?? 0)} steps an orbit)`}`;
+  const rows: [string, string, string, string][] = [
+    ["claimed", String(claimed.value), `± ${size(claimed.halfWidth)}`, `${claimed.unit}, ${baseline}`],
+    ["as solved", number(asSolved.value), "", how],
+    ["null run", number(asSolved.null), "", "the same with the effect switched off"],
+    [
+      "best value",
+      best.value === null ? "none" : figure(best.value, best.halfWidth ?? 0),
+      best.halfWidth === null ? "" : `± ${size(best.halfWidth)}`,
+      best.from === null ? "" : `by ${best.from}`,
+    ],
+    [
+      "error",
+      asSolved.error === null ? "none" : size(asSolved.error),
+      asSolved.halfWidth === null ? "" : `± ${size(asSolved.halfWidth)}`,
+      "as solved less best",
+    ],
+  ];
+  return table(rows, ["left", "right", "left", "left"], width);
+}
+
+function checks(list: readonly Check[], width: number, paint: Paint): string[] {
+  const name = Math.max(...list.map((check) => check.name.length));
+  const indent = 10 + name + 2;
+  return list.flatMap(({ outcome, name: called, says }) => {
+    const [first = "", ...rest] = wrap(clean(says), width - indent);
+    const word = paint(OUTCOME_STYLES[outcome], padEnd(OUTCOME_WORDS[outcome], 10));
+    return [`${word}${padEnd(called, name + 2)}${first}`, ...rest.map((line) => " ".repeat(indent) + line)];
+  });
+}
+
+function ladder({ ladders, best, claimed }: ClaimResult, width: number, paint: Paint): string[] {
+  const own = ladders.find(({ role }) => role === "solution") ?? ladders[0];
+  if (own === undefined || claimed === null) return [];
+  const rows = own.rungs.map((rung): string[] => [
+    `${rung.isAuthors ? "> " : "  "}${rung.stepsPerOrbit.toPrecision(4).replace(/\.0+$/, "")}`,
+    rung.figure === null ? rung.status : figure(rung.figure, claimed.halfWidth / 100),
+    rung.figure === null || best.value === null ? "" : size(rung.figure - best.value),
+    rung.null === null ? "" : size(rung.null),
+    inWindow(own, rung) ? "window" : "",
+  ]);
+  return [
+    ...wrap(`Ladder of ${own.method}. ${clean(own.says)}`, width),
+    ...table(
+      [["  steps/orbit", "figure", "less best", "null run", ""], ...rows],
+      ["right", "right", "right", "right", "left"],
+      width,
+    ).map((line, i) => (i === 0 ? paint("dim", line) : line)),
+  ];
+}
+
+function inWindow({ window, rungs }: Ladder, rung: Rung): boolean {
+  const k = rungs.indexOf(rung);
+  return window !== null && k >= window[0] && k <= window[1];
+}
+
+function remedy({ remedy: found }: ClaimResult, width: number): string[] {
+  if (found === null) return [];
+  const rows = found.options
+    .slice(0, 4)
+    .map(({ method, step, relativeCost, basis }) => [
+      `  ${method}`,
+      step,
+      `${size(relativeCost)} times the evaluations`,
+      basis,
+    ]);
+  return [...wrap(clean(found.says), width), ...table(rows, ["left", "left", "left", "left"], width)];
+}
+
+function footer({ gradeRule, grade }: ClaimResult, { page, width }: TerminalOptions): string[] {
+  return [
+    ...(grade === null ? [] : wrap(`Grade ${grade}: ${clean(gradeRule)}`, width)),
+    ...wrap(
+      "This judges numerics only; it is no clearance for flight, navigation or conjunction work.",
+      width,
+    ),
+    ...(page === undefined ? [] : [`report  ${page}`]),
+  ];
+}
+
+/** Aligned columns, cut at the width. */
+function table(
+  rows: readonly (readonly string[])[],
+  align: readonly ("left" | "right")[],
+  width: number,
+): string[] {
+  const widths = align.map((_, i) => Math.max(0, ...rows.map((row) => columns(row[i] ?? ""))));
+  return rows.map((row) =>
+    cut(
+      row
+        .map((cell, i) => (align[i] === "right" ? padStart(cell, widths[i]!) : padEnd(cell, widths[i]!)))
+        .join("  ")
+        .trimEnd(),
+      width,
+    ),
+  );
+}
+
+/** Several claims, one line each. */
+export function renderOverview(results: readonly ClaimResult[], options: TerminalOptions): string {
+  const paint: Paint = options.colour
+    ? (style, text) => styleText(style, text, { validateStream: false })
+    : (_, text) => text;
+  return results
+    .map((result) => {
+      const word = paint(VERDICT_STYLES[result.verdict], padEnd(VERDICT_WORDS[result.verdict], 17));
+      const grade = padEnd(result.grade ?? "-", 3);
+      return `${word}${grade}${cut(clean(result.file), options.width - 20)}\n`;
+    })
+    .join("");
+}
