@@ -28,3 +28,8 @@ export function writeOut(text: string): Promise<void> {
 export function say(text: string): void {
   process.stderr.write(`${text}\n`);
 }
+
+/** Whether a stream may be coloured: a terminal that has colours, and NO_COLOR not set (no-color.org). */
+export function mayColour(stream: NodeJS.WriteStream): boolean {
+  return stream.isTTY === true && stream.hasColors();
+}

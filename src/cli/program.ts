@@ -1,40 +1,32 @@
-import yargs, { type Argv } from "yargs";
 import { CallError } from "./call-error.js";
+import { commands } from "./command.js";
 import { EXIT, leaveWith } from "./exit.js";
-import { say } from "./output.js";
-import { schema } from "./schema.js";
-import { version } from "./version.js";
+import { say, writeOut } from "./output.js";
+import { overview } from "./overview.js";
 
-/** Reads the call and carries out its command. Commands import what is heavy when they run. */
+/** Reads the call and carries out its command. */
 export async function run(args: readonly string[]): Promise<void> {
-  const program = describe(args);
-  if (args.length === 0) {
-    say(await program.getHelp());
+  const [first, ...rest] = args;
+  if (first === undefined) {
+    say(overview());
     leaveWith(EXIT.inputWrong);
-    return;
+  } else if (first === "--help" || first === "-h" || first === "help") {
+    await writeOut(overview());
+  } else if (first === "--version") {
+    const { version } = await import("./version.js");
+    await writeOut(`${version()}\n`);
+  } else {
+    const command = commands.find(({ name }) => name === first);
+    if (command === undefined) throw new CallError(await unknownCommand(first));
+    const { carryOut } = await import("./parse.js");
+    await carryOut(command, rest);
   }
-  await program.parseAsync();
 }
 
-function describe(args: readonly string[]): Argv {
-  return yargs(args)
-    .scriptName("cupel")
-    .parserConfiguration({
-      "boolean-negation": false,
-      "camel-case-expansion": false,
-      "duplicate-arguments-array": false,
-      "parse-positional-numbers": false,
-    })
-    .detectLocale(false)
-    .exitProcess(false)
-    .usage("Finds out which digits of a figure read off an orbit integration stand.\n\ncupel COMMAND")
-    .command(schema)
-    .strict()
-    .demandCommand(1, "no command given; see 'cupel --help'")
-    .version(version())
-    .help()
-    .wrap(80)
-    .fail((message, error) => {
-      throw error ?? new CallError(message);
-    });
+async function unknownCommand(given: string): Promise<string> {
+  const { echo } = await import("../claim/problem.js");
+  const { oneOf } = await import("../claim/nearest.js");
+  if (given.startsWith("-")) return `found ${echo(given)} before the command; wanted the command first`;
+  const names = commands.map(({ name }) => name);
+  return `found the unknown command ${echo(given)}; wanted ${oneOf(given, names)}`;
 }

@@ -1,13 +1,13 @@
-import type { CommandModule } from "yargs";
+import type { Command } from "./command.js";
 import { writeOut } from "./output.js";
 
-export const schema: CommandModule = {
-  command: "schema",
-  describe: "Print the JSON Schema of claim files, for editors",
-  builder: (yargs) =>
-    yargs.example("cupel schema > claim.schema.json", "Keep it where your editor looks for schemas"),
-  handler: async () => {
-    const { claimJsonSchema } = await import("../claim/schema.js");
-    await writeOut(`${JSON.stringify(claimJsonSchema(), null, 2)}\n`);
-  },
+export const schema: Command = {
+  options: {},
+  attach: (program) =>
+    program
+      .example("cupel schema > claim.schema.json", "Keep it where your editor finds it")
+      .command("$0", false, {}, async () => {
+        const { claimJsonSchema } = await import("../claim/schema.js");
+        await writeOut(`${JSON.stringify(claimJsonSchema(), null, 2)}\n`);
+      }),
 };

@@ -1,0 +1,79 @@
+import { CallError } from "./call-error.js";
+import type { Command } from "./command.js";
+
+/** More threads than any machine has use for. */
+const MOST_WORKERS = 256;
+
+const options = {
+  out: {
+    type: "string",
+    requiresArg: true,
+    default: "cupel-report",
+    describe: "Folder for the pages",
+  },
+  "no-report": { type: "boolean", describe: "Write no pages" },
+  json: {
+    type: "string",
+    requiresArg: true,
+    describe: "Write the result as JSON to this file; - is standard output, in place of the summary",
+  },
+  workers: {
+    type: "string",
+    requiresArg: true,
+    describe: "Threads to work on; as many as cores when left out",
+  },
+  quiet: { type: "boolean", describe: "One line a claim, and no progress" },
+  colour: {
+    type: "string",
+    requiresArg: true,
+    choices: ["auto", "always", "never"],
+    default: "auto",
+    describe: "Colour in the summary; auto: on a terminal, unless NO_COLOR is set",
+  },
+} as const;
+
+export const audit: Command = {
+  options,
+  attach: (program) =>
+    program
+      .example("cupel audit claim.yaml", "One claim; its page goes to cupel-report/")
+      .example("cupel audit 'claims/**/*.yaml'", "Many claims, with an index page")
+      .example("cupel audit claim.yaml --json -", "The result as JSON on standard output")
+      .command(
+        "$0 [claims..]",
+        false,
+        (yargs) =>
+          yargs
+            .positional("claims", {
+              type: "string",
+              array: true,
+              describe: "Claim files, or globs in quotes",
+            })
+            .options(options),
+        async ({ claims, workers, out, json, quiet, colour, ...given }) => {
+          if (claims === undefined || claims.length === 0) {
+            throw new CallError("found no claim to audit; wanted files or globs");
+          }
+          if (out === "") throw new CallError("--out: found nothing; wanted a folder");
+          if (json === "") throw new CallError("--json: found nothing; wanted a file, or -");
+          const count = workers === undefined ? null : threads(workers);
+          const { carryOut } = await import("./carry-out.js");
+          await carryOut({
+            claims,
+            workers: count,
+            out: given["no-report"] ? null : out,
+            json: json ?? null,
+            quiet: quiet === true,
+            colour,
+          });
+        },
+      ),
+};
+
+function threads(text: string): number {
+  const count = /^\d{1,4}$/.test(text) ? Number(text) : 0;
+  if (count < 1 || count > MOST_WORKERS) {
+    throw new CallError(`--workers: found '${text}'; wanted a whole number from 1 to ${MOST_WORKERS}`);
+  }
+  return count;
+}

@@ -1,0 +1,31 @@
+/** A line on a terminal that says how far the work is; nothing anywhere else. */
+export class Progress {
+  readonly #stream: NodeJS.WriteStream;
+  readonly #shown: boolean;
+  #last = "";
+
+  constructor(stream: NodeJS.WriteStream, wanted: boolean) {
+    this.#stream = stream;
+    this.#shown = wanted && stream.isTTY === true;
+  }
+
+  /**
+   * @param part of the work behind, 0 to 1
+   * @param what is being done
+   */
+  show(part: number, what: string): void {
+    if (!this.#shown) return;
+    const line = `${String(Math.floor(100 * part)).padStart(3)} %  ${what}`.slice(
+      0,
+      this.#stream.columns - 1,
+    );
+    if (line === this.#last) return;
+    this.#last = line;
+    this.#stream.write(`\r\u001b[K${line}`);
+  }
+
+  clear(): void {
+    if (this.#shown && this.#last !== "") this.#stream.write("\r\u001b[K");
+    this.#last = "";
+  }
+}
