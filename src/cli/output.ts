@@ -1,3 +1,4 @@
+import { clean } from "../report/text.js";
 import { CallError } from "./call-error.js";
 
 /** Whoever reads closed the pipe early, as `| head -1` does: nothing more to say there, and no failure. */
@@ -24,9 +25,9 @@ export function writeOut(text: string): Promise<void> {
   });
 }
 
-/** A message for people, on standard error. */
+/** A message for people, on standard error; names of files in it may hold anything. */
 export function say(text: string): void {
-  process.stderr.write(`${text}\n`);
+  process.stderr.write(`${text.split("\n").map(clean).join("\n")}\n`);
 }
 
 /** Whether a stream may be coloured: a terminal that has colours, and NO_COLOR not set (no-color.org). */

@@ -1,3 +1,5 @@
+import { cut } from "../report/text.js";
+
 /** A line on a terminal that says how far the work is; nothing anywhere else. */
 export class Progress {
   readonly #stream: NodeJS.WriteStream;
@@ -15,9 +17,9 @@ export class Progress {
    */
   show(part: number, what: string): void {
     if (!this.#shown) return;
-    const line = `${String(Math.floor(100 * part)).padStart(3)} %  ${what}`.slice(
-      0,
-      this.#stream.columns - 1,
+    const line = cut(
+      `${String(Math.floor(100 * part)).padStart(3)} %  ${what}`,
+      (this.#stream.columns || 80) - 1,
     );
     if (line === this.#last) return;
     this.#last = line;
@@ -25,7 +27,7 @@ export class Progress {
   }
 
   clear(): void {
-    if (this.#shown && this.#last !== "") this.#stream.write("\r\u001b[K");
+    if (this.#last !== "") this.#stream.write("\r\u001b[K");
     this.#last = "";
   }
 }

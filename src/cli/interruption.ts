@@ -1,0 +1,24 @@
+import { constants } from "node:os";
+import { EXIT } from "./exit.js";
+import { say } from "./output.js";
+
+const SIGNALS = ["SIGINT", "SIGTERM", "SIGHUP"] as const;
+
+/**
+ * Does work that a signal may end: then cleans up and leaves at once, workers included.
+ *
+ * @param cleanUp synchronous, so that nothing comes between it and the end
+ */
+export async function interruptible(cleanUp: () => void, work: () => Promise<void>): Promise<void> {
+  const stop = (signal: (typeof SIGNALS)[number]): void => {
+    cleanUp();
+    say("cupel: interrupted; nothing of this audit is kept");
+    process.exit(EXIT.signal + constants.signals[signal]);
+  };
+  for (const signal of SIGNALS) process.once(signal, stop);
+  try {
+    await work();
+  } finally {
+    for (const signal of SIGNALS) process.off(signal, stop);
+  }
+}

@@ -1,0 +1,76 @@
+import { existsSync, rmdirSync } from "node:fs";
+import { dirname, join, resolve } from "node:path";
+import { makeFolder, pageNames } from "../report/write.js";
+import type { ClaimResult } from "../result/result.js";
+import { asCallError, tryWriting, writeTo } from "./destination.js";
+
+/** The folder of the pages: a page a claim, and an index of several. */
+export class ReportFolder {
+  readonly #path: string;
+  /** Folders that were not there before, innermost first. */
+  readonly #made: readonly string[];
+  readonly #pages: { readonly result: ClaimResult; readonly href: string; readonly html: string }[] = [];
+  readonly #names: readonly string[];
+
+  private constructor(path: string, made: readonly string[], files: readonly string[]) {
+    this.#path = path;
+    this.#made = made;
+    this.#names = pageNames(files);
+  }
+
+  /**
+   * Makes the folder ahead of the work.
+   *
+   * @throws CallError where pages could not be written
+   */
+  static async open(path: string, files: readonly string[]): Promise<ReportFolder> {
+    const made = missing(path);
+    await asCallError(path, makeFolder(path));
+    const folder = new ReportFolder(path, made, files);
+    try {
+      await tryWriting(join(path, "index.html"));
+    } catch (error) {
+      folder.leave();
+      throw error;
+    }
+    return folder;
+  }
+
+  /** Makes the page of the next claim; it is written with the others. */
+  async add(result: ClaimResult): Promise<void> {
+    const { renderPage } = await import("../report/page/page.js");
+    this.#pages.push({ result, href: this.#names[this.#pages.length]!, html: await renderPage(result) });
+  }
+
+  /**
+   * Writes the pages.
+   *
+   * @returns the page to open: the only one, or the index
+   * @throws CallError
+   */
+  async write(): Promise<string> {
+    for (const { href, html } of this.#pages) await writeTo(join(this.#path, href), html);
+    if (this.#pages.length === 1) return join(this.#path, this.#pages[0]!.href);
+    const { renderIndex } = await import("../report/page/index-page.js");
+    const index = join(this.#path, "index.html");
+    await writeTo(index, await renderIndex(this.#pages));
+    return index;
+  }
+
+  /** Takes away the folders that were made for pages that never came; also for a signal handler. */
+  leave(): void {
+    for (const folder of this.#made) {
+      try {
+        rmdirSync(folder);
+      } catch {
+        return; // not empty: it is in use
+      }
+    }
+  }
+}
+
+function missing(path: string): string[] {
+  const folders: string[] = [];
+  for (let next = resolve(path); !existsSync(next); next = dirname(next)) folders.push(next);
+  return folders;
+}
