@@ -8,16 +8,22 @@ import { tellFailure } from "./failure.js";
 import { inOrder } from "./in-order.js";
 import type { Progress } from "./progress.js";
 
-/** Audits claims on one pool of workers and yields their results in the order given. */
+/**
+ * Audits claims on one pool of workers and yields their results in the order given.
+ *
+ * @param meanwhile called once, when the workers have work and this thread has none
+ */
 export async function* auditAll(
   outcomes: readonly ReadOutcome[],
   workers: number,
   progress: Progress,
+  meanwhile: () => void,
 ): AsyncGenerator<ClaimResult, void, undefined> {
   const readable = outcomes.filter((outcome) => outcome.ok);
   const auditor = readable.length === 0 ? null : await createAuditor({ workers });
   const behind = outcomes.map(() => 0);
   let done = 0;
+  let begun = false;
   const tell = (): void => {
     const part = behind.reduce((sum, next) => sum + next, 0) / readable.length;
     const what =
@@ -31,6 +37,8 @@ export async function* auditAll(
       const result = await auditOne(auditor!, outcome.claim, progress, (part) => {
         behind[i] = part;
         tell();
+        if (!begun) setImmediate(meanwhile);
+        begun = true;
       });
       behind[i] = 1;
       done++;

@@ -31,18 +31,24 @@ export interface AuditOptions extends SummaryStyle {
  * @throws CallError
  */
 export async function carryOut(options: AuditOptions): Promise<void> {
-  const files = await claimFiles(options.claims);
-  const { json, out } = options;
-  // What cannot be written is known before the long work is done.
-  if (json !== null && json !== "-") await tryWriting(json);
-  const folder = out === null ? null : await ReportFolder.open(out, files);
   const progress = new Progress(process.stderr, !options.quiet);
+  let folder: ReportFolder | null = null;
   const cleanUp = (): void => {
     progress.clear();
     removeUnfinished();
     folder?.leave();
   };
-  await interruptible(cleanUp, () => auditFiles(files, options, folder, progress)).finally(cleanUp);
+  await interruptible(cleanUp, async () => {
+    try {
+      const files = await claimFiles(options.claims);
+      // What cannot be written is known before the long work is done.
+      if (options.json !== null && options.json !== "-") await tryWriting(options.json);
+      if (options.out !== null) folder = await ReportFolder.open(options.out, files);
+      await auditFiles(files, options, folder, progress);
+    } finally {
+      cleanUp();
+    }
+  });
 }
 
 async function auditFiles(
@@ -58,14 +64,15 @@ async function auditFiles(
     outcomes.push(outcome);
   }
   const results: ClaimResult[] = [];
-  for await (const result of auditAll(outcomes, options.workers ?? availableParallelism(), progress)) {
+  const workers = options.workers ?? availableParallelism();
+  for await (const result of auditAll(outcomes, workers, progress, () => folder?.prepare())) {
     results.push(result);
     if (result.setup === null) {
       // No audit was carried out; what could not be read has been told above.
       leaveWith(EXIT.inputWrong);
       if (outcomes[results.length - 1]!.ok) say(`${result.file}: ${result.reason}`);
     }
-    await folder?.add(result);
+    folder?.add(result);
     progress.clear();
   }
   const audited = results.some(({ setup }) => setup !== null);

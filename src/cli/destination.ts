@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
-import { realpath, rm, stat, writeFile } from "node:fs/promises";
+import { rmSync } from "node:fs";
+import { realpath, stat, writeFile } from "node:fs/promises";
 import { dirname, join } from "node:path";
 import { WriteError, writeWhole } from "../report/write.js";
 import { CallError } from "./call-error.js";
@@ -29,7 +30,7 @@ export async function tryWriting(path: string): Promise<void> {
   const target = await realpath(path).catch(() => path);
   const trial = join(dirname(target), `.cupel-${randomUUID()}`);
   await asCallError(path, writeWhole(trial, ""), trial);
-  await rm(trial, { force: true });
+  rmSync(trial, { force: true });
 }
 
 /** An error in writing is told of the path that was asked for. */

@@ -12,7 +12,7 @@ const SIGNALS = ["SIGINT", "SIGTERM", "SIGHUP"] as const;
 export async function interruptible(cleanUp: () => void, work: () => Promise<void>): Promise<void> {
   const stop = (signal: (typeof SIGNALS)[number]): void => {
     cleanUp();
-    say("cupel: interrupted; nothing of this audit is kept");
+    say("cupel: interrupted");
     process.exit(EXIT.signal + constants.signals[signal]);
   };
   for (const signal of SIGNALS) process.once(signal, stop);

@@ -9,7 +9,8 @@ export class ReportFolder {
   readonly #path: string;
   /** Folders that were not there before, innermost first. */
   readonly #made: readonly string[];
-  readonly #pages: { readonly result: ClaimResult; readonly href: string; readonly html: string }[] = [];
+  readonly #pages: { readonly result: ClaimResult; readonly href: string; readonly html: Promise<string> }[] =
+    [];
   readonly #names: readonly string[];
 
   private constructor(path: string, made: readonly string[], files: readonly string[]) {
@@ -36,10 +37,16 @@ export class ReportFolder {
     return folder;
   }
 
-  /** Makes the page of the next claim; it is written with the others. */
-  async add(result: ClaimResult): Promise<void> {
-    const { renderPage } = await import("../report/page/page.js");
-    this.#pages.push({ result, href: this.#names[this.#pages.length]!, html: await renderPage(result) });
+  /** Loads what pages are drawn with, which takes as long as drawing. */
+  prepare(): void {
+    import("../report/page/plots/frame.js").then(({ canvas }) => canvas()).catch(() => {});
+  }
+
+  /** Begins the page of the next claim; a defect in it shows when the pages are written. */
+  add(result: ClaimResult): void {
+    const html = import("../report/page/page.js").then(({ renderPage }) => renderPage(result));
+    html.catch(() => {});
+    this.#pages.push({ result, href: this.#names[this.#pages.length]!, html });
   }
 
   /**
@@ -49,7 +56,7 @@ export class ReportFolder {
    * @throws CallError
    */
   async write(): Promise<string> {
-    for (const { href, html } of this.#pages) await writeTo(join(this.#path, href), html);
+    for (const { href, html } of this.#pages) await writeTo(join(this.#path, href), await html);
     if (this.#pages.length === 1) return join(this.#path, this.#pages[0]!.href);
     const { renderIndex } = await import("../report/page/index-page.js");
     const index = join(this.#path, "index.html");
