@@ -30,7 +30,7 @@ export function differentiate(graph: Graph, node: Node, symbol: string): Node {
       case "multiply":
         return graph.add(graph.multiply(of(a), b), graph.multiply(a, of(b)));
       case "divide":
-        return graph.divide(graph.subtract(of(a), graph.multiply(n, of(b))), b);
+        return graph.multiply(graph.subtract(of(a), graph.multiply(n, of(b))), inverse(graph, b));
       case "power":
         return power(n, a, b);
       default:
@@ -48,6 +48,11 @@ export function differentiate(graph: Graph, node: Node, symbol: string): Node {
   return of(node);
 }
 
+/** A reciprocal is shared by all derivatives that need it, where a quotient each would divide each time. */
+function inverse(graph: Graph, node: Node): Node {
+  return graph.divide(graph.one, node);
+}
+
 /** d f(a) = f'(a) da; `n` is f(a) itself. */
 function chain(graph: Graph, name: FunctionName, n: Node, a: Node, da: Node): Node {
   if (da === graph.zero) return da;
@@ -55,7 +60,7 @@ function chain(graph: Graph, name: FunctionName, n: Node, a: Node, da: Node): No
   const cosineOfArc = (): Node => graph.call("sqrt", graph.subtract(graph.one, square(a)));
   switch (name) {
     case "sqrt":
-      return graph.divide(da, graph.multiply(graph.number(2), n));
+      return graph.multiply(da, graph.multiply(graph.number("0.5"), inverse(graph, n)));
     case "sin":
       return graph.multiply(graph.call("cos", a), da);
     case "cos":

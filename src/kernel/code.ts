@@ -51,7 +51,9 @@ function expression(text: string, dialect: Dialect): string {
 
 /** A double as a literal that reads back to the same bits in both languages. */
 export function literal(value: number): string {
-  return value < 0 ? `(${value})` : String(value);
+  // C would read a long row of digits without a point as an integer too large for it.
+  const text = Math.abs(value) < 2 ** 31 ? String(value) : value.toExponential();
+  return value < 0 ? `(${text})` : text;
 }
 
 /** Sum of coefficient times name, left to right, without the terms of coefficient zero. */

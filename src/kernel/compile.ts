@@ -24,9 +24,12 @@ export function compileStepLoop(system: CompiledSystem, method: MethodDefinition
   };
 }
 
-/** The same loop as a C function `int advance(double *io, const double *parameters, double h, int steps)`. */
-export function stepLoopInC(system: CompiledSystem, method: MethodDefinition): string {
-  return `#include <math.h>\n${writeLoop(system, method, "c").text}\n`;
+/**
+ * The same loop as a C function `int NAME(double *io, const double *parameters, double h, int steps)`, for a
+ * file that includes math.h.
+ */
+export function stepLoopInC(system: CompiledSystem, method: MethodDefinition, name: string): string {
+  return writeLoop(system, method, "c").text.replace("int advance(", `int ${name}(`);
 }
 
 function writeLoop(

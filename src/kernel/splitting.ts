@@ -23,28 +23,28 @@ export function splitting(method: Splitting, context: StepContext): StepBody {
   }
   let accelerations: readonly string[] | null = carried ? carry : null;
   let evaluations = 0;
-  const move = (state: string, stage: number, weight: number, rate: string): void => {
+  const move = (state: string, stage: number, rate: string): void => {
     const moved = `${state}_${stage}`;
-    step.define(moved, `${at(state)} + ${literal(weight)} * h * ${rate}`);
+    step.define(moved, `${at(state)} + w${stage} * ${rate}`);
     names.set(state, moved);
   };
   method.stages.forEach((part, stage) => {
+    const weight = evaluateConstant("drift" in part ? part.drift : part.kick);
+    before.define(`w${stage}`, `${literal(weight)} * h`);
     if ("drift" in part) {
-      const weight = evaluateConstant(part.drift);
       coordinates.forEach((coordinate, i) => {
-        move(coordinate, stage, weight, at(rates[i]!));
+        move(coordinate, stage, at(rates[i]!));
       });
       accelerations = null;
       return;
     }
-    const weight = evaluateConstant(part.kick);
     if (accelerations === null) {
       accelerations = context.accelerate(step, `s${stage}_`, at);
       evaluations++;
     }
     const kicks = accelerations;
     rates.forEach((rate, i) => {
-      move(rate, stage, weight, kicks[i]!);
+      move(rate, stage, kicks[i]!);
     });
   });
   for (const state of [...coordinates, ...rates]) step.define(next(state), at(state));
