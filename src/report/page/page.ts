@@ -14,7 +14,7 @@ import {
 } from "./captions.js";
 import { budgetPlot } from "./plots/budget.js";
 import { canvas } from "./plots/frame.js";
-import { intervals } from "./plots/intervals.js";
+import { intervalsPlot } from "./plots/intervals.js";
 import { ladderPlot } from "./plots/ladder.js";
 import { ledgerPlot } from "./plots/ledger.js";
 import { passagesPlot } from "./plots/passages.js";
@@ -26,15 +26,10 @@ import { OUTCOME_TITLES, VERDICT_TITLES } from "./words.js";
 /** One claim as one HTML file: no network, nothing to load, complete without scripts. */
 export async function renderPage(result: ClaimResult): Promise<string> {
   const [paper, render] = await Promise.all([canvas(), template("claim")]);
-  const figures = intervals(paper, result);
   const unit = result.claimed?.unit ?? "";
   const plots = [
     section("claimed-and-recomputed", "Claimed and recomputed", [
-      { svg: figures?.whole, caption: figures?.zoomed == null ? intervalsCaption(result) : "" },
-      {
-        svg: figures?.zoomed,
-        caption: `Close to the claim: five margins to each side. ${intervalsCaption(result)}`,
-      },
+      { svg: intervalsPlot(paper, result), caption: intervalsCaption(result) },
     ]),
     section("the-ladder", "The ladder", [{ svg: ladderPlot(paper, result), caption: ladderCaption(result) }]),
     section("with-the-effect-switched-off", "With the effect switched off", [

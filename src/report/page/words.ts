@@ -22,3 +22,6 @@ export const BUDGET_WORDS: Readonly<Record<BudgetPart, string>> = {
   methodSpread: "method spread",
   sampling: "sampling",
 };
+
+/** A catalog or ledger name as words. */
+export const spaced = (name: string): string => name.replaceAll("-", " ");

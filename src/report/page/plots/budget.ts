@@ -1,50 +1,76 @@
 import type { ClaimResult } from "../../../result/result.js";
+import { size as inWords } from "../../../result/words.js";
+import { typeset } from "../typeset.js";
 import { BUDGET_WORDS } from "../words.js";
-import { type Canvas, decades, draw, tick } from "./frame.js";
+import { logTicks } from "./axes.js";
+import { type Canvas, draw } from "./frame.js";
 
 /** The parts of the uncertainty on a logarithmic axis, beside what the quoted margin allows. */
 export function budgetPlot(canvas: Canvas, { budget, claimed }: ClaimResult): string | null {
   if (budget === null || claimed === null) return null;
-  const parts = (Object.keys(BUDGET_WORDS) as (keyof typeof BUDGET_WORDS)[]).flatMap((name) => {
-    const size = budget[name];
-    return size !== null && size > 0
-      ? [{ name: BUDGET_WORDS[name], size, dominant: name === budget.dominant }]
-      : [];
+  const parts = (Object.keys(BUDGET_WORDS) as (keyof typeof BUDGET_WORDS)[]).flatMap((key) => {
+    const amount = budget[key];
+    if (amount === null || amount <= 0) return [];
+    return [{ name: BUDGET_WORDS[key], amount, isDominant: key === budget.dominant }];
   });
   if (parts.length === 0) return null;
   const third = claimed.halfWidth / 3;
-  const sizes = [...parts.map(({ size }) => size), third];
-  const x: [number, number] = [Math.min(...sizes) / 4, Math.max(...sizes) * 4];
-  const { plot } = canvas;
-  return draw(
-    canvas,
-    `Parts of the numerical uncertainty in ${claimed.unit}: ${parts.map(({ name, size }) => `${name} ${size.toPrecision(2)}`).join(", ")}.`,
-    {
-      height: 60 + 28 * parts.length,
-      marginLeft: 110,
-      marginRight: 24,
-      x: { type: "log", domain: x, label: `${claimed.unit} →`, ticks: decades(...x), tickFormat: tick },
-      y: { domain: parts.map(({ name }) => name), label: null, tickSize: 0 },
-      marks: [
-        plot.gridX(decades(...x), { strokeOpacity: 0.1 }),
-        plot.barX(parts, {
-          y: "name",
-          x1: () => x[0],
-          x2: "size",
-          fill: "currentColor",
-          fillOpacity: (part: (typeof parts)[number]) => (part.dominant ? 0.75 : 0.25),
-          insetTop: 5,
-          insetBottom: 5,
-        } as never),
-        plot.ruleX([third], { stroke: "var(--accent)", strokeDasharray: "6 3" }),
-        plot.text([third], {
-          x: third,
-          frameAnchor: "top",
-          dy: -14,
-          text: () => "a third of the margin",
-          fill: "var(--accent)",
-        } as never),
-      ],
-    } as never,
-  );
+  const amounts = [...parts.map(({ amount }) => amount), third];
+  const low = Math.min(...amounts) / 6;
+  const high = Math.max(...amounts) * 2;
+  return draw(canvas, {
+    id: "budget",
+    title: "The parts of the numerical uncertainty",
+    says: `In ${claimed.unit}: ${parts.map(({ name, amount }) => `${name} ${typeset(inWords(amount))}`).join(", ")}; a third of the margin is ${typeset(inWords(third))}.`,
+    build: (plot, size) => {
+      // The longest bar's figure stands behind its end.
+      const x: [number, number] = [low, high * (high / low) ** (size === "wide" ? 0.1 : 0.24)];
+      const ticks = logTicks(...x, size === "wide" ? 9 : 5);
+      return {
+        height: 34 + 26 * parts.length + 42,
+        marginLeft: 92,
+        marginRight: 14,
+        x: {
+          type: "log",
+          domain: x,
+          label: `${claimed.unit} →`,
+          ticks: ticks.values,
+          tickFormat: ticks.format,
+        },
+        y: { domain: parts.map(({ name }) => name), label: null, tickSize: 0 },
+        marks: [
+          plot.gridX(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          ...parts.flatMap(({ name, amount, isDominant }) => [
+            plot.barX([name], {
+              y: [name],
+              x1: low,
+              x2: amount,
+              fill: isDominant ? "var(--own)" : "var(--quiet)",
+              insetTop: isDominant ? 4 : 8,
+              insetBottom: isDominant ? 4 : 8,
+            }),
+            plot.text([name], {
+              x: amount,
+              y: [name],
+              text: [`${typeset(inWords(amount))}${isDominant && size === "wide" ? ", dominant" : ""}`],
+              textAnchor: "start",
+              dx: 6,
+              fill: "var(--ink)",
+              stroke: "var(--paper)",
+              fontWeight: isDominant ? "bold" : "normal",
+            }),
+          ]),
+          plot.ruleX([third], { stroke: "var(--ink)", strokeDasharray: "6 3" }),
+          plot.text([third], {
+            x: third,
+            frameAnchor: "top",
+            dy: -14,
+            text: ["a third of the margin"],
+            textAnchor: Math.log(third / low) > Math.log(x[1] / low) / 2 ? "end" : "start",
+            fill: "var(--ink)",
+          }),
+        ],
+      };
+    },
+  });
 }

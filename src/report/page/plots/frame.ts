@@ -1,9 +1,9 @@
 import type * as PlotModule from "@observablehq/plot";
 
-export type Plot = typeof PlotModule;
+type Plot = typeof PlotModule;
 type PlotOptions = PlotModule.PlotOptions;
 
-/** The plotting library and a document to draw in: loaded when the first page is made. */
+/** The plotting library and a document to draw in. */
 export interface Canvas {
   readonly plot: Plot;
   readonly document: NonNullable<PlotOptions["document"]>;
@@ -11,68 +11,74 @@ export interface Canvas {
 
 let loaded: Promise<Canvas> | undefined;
 
+/** Loaded when the first page is made: the two take longer than all that a call for help has. */
 export function canvas(): Promise<Canvas> {
   loaded ??= (async () => {
     const [plot, { parseHTML }] = await Promise.all([import("@observablehq/plot"), import("linkedom")]);
-    return {
-      plot,
-      document: parseHTML("<html><body></body></html>").document as unknown as Canvas["document"],
-    };
+    const { document } = parseHTML("<html><body></body></html>");
+    return { plot, document: document as unknown as Canvas["document"] };
   })();
   return loaded;
 }
 
-/** Wide enough for every label; narrower screens scroll the plot and not the page. */
-export const PLOT_WIDTH = 720;
+/** A plot is drawn at two widths, so that its labels have the same size on a telephone as on a desk. */
+export type Size = "wide" | "narrow";
+export const WIDTHS: Readonly<Record<Size, number>> = { wide: 720, narrow: 340 };
+const BOTH: readonly Size[] = ["wide", "narrow"];
 
-/**
- * Draws a plot as SVG text.
- *
- * @param alternative what the plot shows, for those who do not see it
- */
-export function draw({ plot, document }: Canvas, alternative: string, options: PlotOptions): string {
-  const svg = plot.plot({
-    document,
-    width: PLOT_WIDTH,
-    marginLeft: 84,
-    marginRight: 96,
-    marginTop: 28,
-    marginBottom: 44,
-    style: { fontSize: "12px", fontFamily: "inherit", background: "none", overflow: "visible" },
-    ...options,
+export interface Drawing {
+  /** Unique on the page. */
+  readonly id: string;
+  /** A name, as a tooltip and to a screen reader. */
+  readonly title: string;
+  /** What the plot shows, for those who do not see it. */
+  readonly says: string;
+  /** The widths that it is drawn at; both when left out. */
+  readonly sizes?: readonly Size[];
+  build(plot: Plot, size: Size): PlotOptions;
+}
+
+/** Draws a plot as SVG text, one `svg` a width; the style sheet shows the one that fits. */
+export function draw({ plot, document }: Canvas, drawing: Drawing): string {
+  return (drawing.sizes ?? BOTH)
+    .map((size) => {
+      const svg = plot.plot({
+        document,
+        width: WIDTHS[size],
+        marginTop: 30,
+        marginBottom: 42,
+        ...drawing.build(plot, size),
+      });
+      const id = `${drawing.id}-${size}`;
+      // Names on parts without a role are no help to a screen reader; the whole has one of its own.
+      for (const part of svg.querySelectorAll("[aria-label],[aria-description]")) {
+        part.removeAttribute("aria-label");
+        part.removeAttribute("aria-description");
+      }
+      svg.querySelector("style")?.remove();
+      svg.removeAttribute("font-family");
+      svg.removeAttribute("font-size");
+      svg.setAttribute("class", drawing.sizes === undefined ? size : "fixed");
+      svg.setAttribute("role", "img");
+      svg.setAttribute("aria-labelledby", `${id}-title ${id}-says`);
+      const said = (tag: string, name: string, text: string) => {
+        const element = document.createElementNS("http://www.w3.org/2000/svg", tag);
+        element.setAttribute("id", `${id}-${name}`);
+        element.textContent = text;
+        return element;
+      };
+      svg.prepend(said("title", "title", drawing.title), said("desc", "says", drawing.says));
+      return withOwnIds(svg.outerHTML, id);
+    })
+    .join("");
+}
+
+/** The library numbers its clip paths through the life of the process; a page must not depend on that. */
+function withOwnIds(svg: string, id: string): string {
+  const seen = new Map<string, string>();
+  return svg.replaceAll(/plot-clip-\d+/g, (name) => {
+    const own = seen.get(name) ?? `${id}-clip-${seen.size}`;
+    seen.set(name, own);
+    return own;
   });
-  // Labels on parts without a role are no help to a screen reader; the whole has one of its own.
-  for (const part of svg.querySelectorAll("[aria-label],[aria-description]")) {
-    part.removeAttribute("aria-label");
-    part.removeAttribute("aria-description");
-  }
-  svg.setAttribute("role", "img");
-  svg.setAttribute("aria-label", alternative);
-  return svg.outerHTML;
-}
-
-/** A number on an axis: plain where it is short, a power of ten where it is not. */
-export function tick(value: number): string {
-  const magnitude = Math.abs(value);
-  if (magnitude === 0 || (magnitude >= 1e-3 && magnitude < 1e5))
-    return minus(String(Number(value.toPrecision(6))));
-  const [mantissa, exponent] = value.toExponential().split("e") as [string, string];
-  const power = `10${superscript(Number(exponent))}`;
-  return Number(mantissa) === 1 ? power : `${minus(mantissa)}·${power}`;
-}
-
-export const minus = (text: string): string => text.replaceAll("-", "−");
-
-const SUPERSCRIPTS = "⁰¹²³⁴⁵⁶⁷⁸⁹";
-const superscript = (value: number): string =>
-  (value < 0 ? "⁻" : "") + [...String(Math.abs(value))].map((digit) => SUPERSCRIPTS[Number(digit)]).join("");
-
-/** Whole powers of ten inside a range, thinned to at most eight. */
-export function decades(low: number, high: number): number[] {
-  const first = Math.ceil(Math.log10(low) - 1e-9);
-  const last = Math.floor(Math.log10(high) + 1e-9);
-  const every = Math.max(1, Math.ceil((last - first + 1) / 8));
-  const ticks: number[] = [];
-  for (let power = first; power <= last; power += every) ticks.push(10 ** power);
-  return ticks;
 }

@@ -1,166 +1,200 @@
 import type { ClaimResult, Ladder } from "../../../result/result.js";
-import { type Canvas, decades, draw, tick } from "./frame.js";
+import { typeset } from "../typeset.js";
+import { logTicks, rungTicks } from "./axes.js";
+import { distances, type Point } from "./distances.js";
+import { type Canvas, draw } from "./frame.js";
+import { spread, tag } from "./labels.js";
 
-interface Point {
-  readonly method: string;
-  readonly n: number;
-  readonly error: number;
+interface Line {
+  readonly ladder: Ladder;
+  readonly isOwn: boolean;
+  readonly points: readonly Point[];
 }
 
-/** Error against steps an orbit, both logarithmic, for the author's method and, quietly, the witnesses. */
+/** Distance from the best value against steps an orbit, for the author's method and, quietly, the witnesses. */
 export function ladderPlot(canvas: Canvas, result: ClaimResult): string | null {
   const { ladders, best, claimed } = result;
-  if (best.value === null || claimed === null) return null;
-  const own = ladders.find(({ role }) => role === "solution") ?? null;
-  const lines = ladders.map((ladder) => ({ ladder, points: pointsOf(ladder, best.value!) }));
+  if (claimed === null) return null;
+  const lines: Line[] = ladders
+    .map((ladder) => ({ ladder, isOwn: ladder.role === "solution", points: distances(ladder, best) }))
+    .filter(({ points }) => points.length > 0)
+    .toSorted((a, b) => Number(a.isOwn) - Number(b.isOwn));
   const all = lines.flatMap(({ points }) => points);
   if (all.length < 2) return null;
-  const { plot } = canvas;
-  const n: [number, number] = [
-    Math.min(...all.map((p) => p.n)) / 1.15,
-    Math.max(...all.map((p) => p.n)) * 1.15,
-  ];
-  const errors = all.map((p) => p.error);
-  const y: [number, number] = [Math.min(...errors) / 3, Math.max(...errors) * 3];
+  const own = lines.find(({ isOwn }) => isOwn)?.ladder ?? null;
   const third = claimed.halfWidth / 3;
-  const ownPoints = lines.find(({ ladder }) => ladder === own)?.points ?? [];
-  const authors = own?.rungs.find(({ isAuthors }) => isAuthors)?.stepsPerOrbit;
-  const ends = lines.flatMap(({ points }) => points.slice(-1));
-  const floor = own?.floor ?? null;
-  const law = own === null ? [] : lawOf(own, y);
-  const window = own?.window ?? null;
-  return draw(canvas, alternative(result, own), {
-    height: 400,
-    marginRight: 150,
-    x: {
-      type: "log",
-      domain: n,
-      label: "steps an orbit →",
-      ticks: rungTicks(own ?? ladders[0]!),
-      tickFormat: (v: number) => String(Math.round(v)),
-    },
-    y: {
-      type: "log",
-      domain: y,
-      label: `↑ distance from the best value, ${claimed.unit}`,
-      ticks: decades(...y),
-      tickFormat: tick,
-    },
-    symbol: { type: "identity" },
-    color: { type: "identity" },
-    marks: [
-      plot.gridY(decades(...y), { strokeOpacity: 0.1 }),
-      ...(window !== null && own !== null
-        ? [
-            plot.rectX([own], {
-              x1: () => own.rungs[window[0]]!.stepsPerOrbit,
-              x2: () => own.rungs[window[1]]!.stepsPerOrbit,
-              fill: "currentColor",
-              fillOpacity: 0.05,
-            }),
-          ]
-        : []),
-      ...(third >= y[0] && third <= y[1]
-        ? [
-            plot.ruleY([third], { stroke: "var(--accent)", strokeDasharray: "6 3" }),
-            plot.text([third], {
-              x: n[0],
-              y: third,
-              text: () => "a third of the margin",
-              textAnchor: "start",
-              dy: -7,
-              dx: 4,
-              fill: "var(--accent)",
-            } as never),
-          ]
-        : []),
-      ...(floor !== null && floor >= y[0] && floor <= y[1]
-        ? [
-            plot.ruleY([floor], { stroke: "currentColor", strokeDasharray: "1 4" }),
-            plot.text([floor], {
-              x: n[0],
-              y: floor,
-              text: () => "rounding",
-              textAnchor: "start",
-              dy: -7,
-              dx: 4,
-              fill: "currentColor",
-            } as never),
-          ]
-        : []),
-      ...lines
-        .filter(({ ladder }) => ladder !== own)
-        .flatMap(({ points }) => [
-          plot.line(points, {
-            x: "n",
-            y: "error",
-            stroke: "currentColor",
-            strokeOpacity: 0.35,
-            strokeWidth: 1,
-          }),
-          plot.dot(points, { x: "n", y: "error", r: 1.6, fill: "currentColor", fillOpacity: 0.45 }),
-        ]),
-      plot.line(law, { x: "n", y: "error", stroke: "currentColor", strokeDasharray: "3 3", strokeWidth: 1 }),
-      plot.line(ownPoints, { x: "n", y: "error", stroke: "currentColor", strokeWidth: 1.8 }),
-      plot.dot(ownPoints, { x: "n", y: "error", r: 3.6, fill: "currentColor" }),
-      plot.dot(
-        ownPoints.filter((point) => point.n === authors),
-        { x: "n", y: "error", r: 8, stroke: "var(--accent)", strokeWidth: 2 },
-      ),
-      plot.text(spread(ends, y), {
-        x: () => n[1],
-        y: "at",
-        text: "method",
-        textAnchor: "start",
-        dx: 6,
-        fill: "currentColor",
-        fontWeight: (point: Point) => (point.method === own?.method ? "bold" : "normal"),
-      } as never),
-    ],
-  } as never);
-}
+  const sizes = [...all.map(({ distance }) => distance), third];
+  const y: [number, number] = [Math.min(...sizes) / 2.5, Math.max(...sizes) * 2.5];
+  const steps = ladders.flatMap(({ rungs }) => rungs.map(({ stepsPerOrbit }) => stepsPerOrbit));
+  const x: [number, number] = [Math.min(...steps) / 1.12, Math.max(...steps) * 1.12];
+  const authors = own?.rungs.find(({ isAuthors }) => isAuthors)?.stepsPerOrbit ?? null;
+  const place = (distance: number): number => Math.log(distance / y[0]) / Math.log(y[1] / y[0]);
+  const at = (share: number): number => y[0] * (y[1] / y[0]) ** share;
 
-function pointsOf({ method, rungs }: Ladder, best: number): Point[] {
-  return rungs.flatMap(({ stepsPerOrbit, figure }) => {
-    const error = figure === null ? 0 : Math.abs(figure - best);
-    return error > 0 ? [{ method, n: stepsPerOrbit, error }] : [];
+  return draw(canvas, {
+    id: "ladder",
+    title: best.value === null ? "Change of the figure from rung to rung" : "Distance from the best value",
+    says: alternative(
+      lines.map(({ ladder }) => ladder),
+      own,
+      best.value === null,
+    ),
+    build: (plot, size) => {
+      const isWide = size === "wide";
+      const height = isWide ? 430 : 360;
+      const ticks = logTicks(...y, isWide ? 9 : 7);
+      const across = rungTicks(
+        (own ?? lines[0]!.ladder).rungs.map((r) => r.stepsPerOrbit),
+        authors,
+        isWide ? 7 : 4,
+      );
+      const label = (text: string, value: number, edge: "left" | "right") =>
+        plot.text([text], {
+          x: edge === "left" ? x[0] : x[1],
+          y: value,
+          text: [text],
+          textAnchor: edge === "left" ? "start" : "end",
+          dx: edge === "left" ? 5 : -5,
+          dy: -7,
+          fill: "var(--ink)",
+          stroke: "var(--paper)",
+          strokeWidth: 4,
+        });
+      const isShown = (value: number | null): value is number =>
+        value !== null && value >= y[0] && value <= y[1];
+      const floor = own?.floor ?? null;
+      const bound = best.value === null ? null : best.halfWidth;
+      const ends = lines.map(({ points }) => points.at(-1)!);
+      const places = spread(
+        ends.map(({ distance }) => place(distance)),
+        15 / (height - 72),
+      );
+      return {
+        height,
+        marginLeft: 46,
+        marginRight: isWide ? 142 : 54,
+        x: {
+          type: "log",
+          domain: x,
+          label: "steps an orbit →",
+          ticks: across.values,
+          tickFormat: across.format,
+        },
+        y: {
+          type: "log",
+          domain: y,
+          label: `↑ ${best.value === null ? "change to the next rung" : "distance from the best value"}, ${claimed.unit}`,
+          ticks: ticks.values,
+          tickFormat: ticks.format,
+        },
+        marks: [
+          ...(own === null || own.window === null
+            ? []
+            : [
+                plot.rectX([own], {
+                  x1: Math.max(x[0], own.rungs[own.window[0]]!.stepsPerOrbit / 1.06),
+                  x2: Math.min(x[1], own.rungs[own.window[1]]!.stepsPerOrbit * 1.06),
+                  fill: "var(--wash)",
+                }),
+              ]),
+          plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          ...(isShown(bound)
+            ? [plot.rectY([bound], { y1: y[0], y2: bound, fill: "var(--quiet)", fillOpacity: 0.22 })]
+            : []),
+          plot.ruleY([third], { stroke: "var(--ink)", strokeDasharray: "6 3" }),
+          ...(isShown(floor) ? [plot.ruleY([floor], { stroke: "var(--ink)", strokeDasharray: "1 3" })] : []),
+          ...(authors === null ? [] : [plot.ruleX([authors], { stroke: "var(--own)", strokeOpacity: 0.55 })]),
+          ...lines.flatMap(({ points, isOwn }) => markLine(points, isOwn)),
+          ...(own === null ? [] : [lawOf(own, y)].map((law) => lawLine(law))),
+          ...lines.flatMap(({ points }, k) =>
+            points
+              .filter(({ n }) => lines[k]!.isOwn && n === authors)
+              .map(({ n, distance }) =>
+                plot.dot([n], { x: n, y: distance, r: 8, stroke: "var(--own)", strokeWidth: 2 }),
+              ),
+          ),
+          label("a third of the margin", third, "left"),
+          ...(isShown(floor) ? [label(isWide ? "rounding floor" : "rounding", floor, "right")] : []),
+          ...(isShown(bound) ? [label("best value ±", bound, "left")] : []),
+          ...(authors === null
+            ? []
+            : [
+                plot.text([authors], {
+                  x: authors,
+                  frameAnchor: "top",
+                  dy: 6,
+                  dx: authors > Math.sqrt(x[0] * x[1]) ? -5 : 5,
+                  textAnchor: authors > Math.sqrt(x[0] * x[1]) ? "end" : "start",
+                  text: ["author's step"],
+                  fill: "var(--own)",
+                  stroke: "var(--paper)",
+                  strokeWidth: 4,
+                }),
+              ]),
+          ...lines.flatMap(({ ladder, isOwn }, k) => [
+            plot.link([ladder], {
+              x1: ends[k]!.n,
+              y1: ends[k]!.distance,
+              x2: x[1],
+              y2: at(places[k]!),
+              stroke: "var(--quiet)",
+              strokeWidth: 0.6,
+            }),
+            plot.text([ladder], {
+              x: x[1],
+              y: at(places[k]!),
+              text: [isWide ? ladder.method : tag(ladder.method)],
+              textAnchor: "start",
+              dx: 4,
+              fill: isOwn ? "var(--own)" : "var(--soft)",
+              fontWeight: isOwn ? "bold" : "normal",
+            }),
+          ]),
+        ],
+      };
+
+      function markLine(points: readonly Point[], isOwn: boolean) {
+        const channels = { x: points.map(({ n }) => n), y: points.map(({ distance }) => distance) };
+        return isOwn
+          ? [
+              plot.line(points, { ...channels, stroke: "var(--own)", strokeWidth: 2 }),
+              plot.dot(points, { ...channels, r: 3.6, fill: "var(--own)" }),
+            ]
+          : [
+              plot.line(points, { ...channels, stroke: "var(--quiet)", strokeWidth: 1 }),
+              plot.dot(points, { ...channels, r: 1.8, fill: "var(--quiet)" }),
+            ];
+      }
+
+      function lawLine(law: readonly Point[]) {
+        return plot.line(law, {
+          x: law.map(({ n }) => n),
+          y: law.map(({ distance }) => distance),
+          stroke: "var(--ink)",
+          strokeWidth: 1.2,
+          strokeDasharray: "4 4",
+        });
+      }
+    },
   });
 }
 
-/** The fitted law over the window, where it lies inside the plot. */
+/** The fitted law over the window, as far as it lies inside the plot. */
 function lawOf(
   { coefficient, figureOrder, window, rungs }: Ladder,
   [low, high]: readonly [number, number],
 ): Point[] {
   if (coefficient === null || figureOrder === null || window === null) return [];
   return rungs
-    .slice(window[0])
-    .map(({ stepsPerOrbit: n }) => ({ method: "", n, error: coefficient * n ** -figureOrder }))
-    .filter(({ error }) => error >= low && error <= high);
+    .slice(window[0], window[1] + 1)
+    .map(({ stepsPerOrbit: n }) => ({ n, distance: Math.abs(coefficient) * n ** -figureOrder }))
+    .filter(({ distance }) => distance >= low && distance <= high);
 }
 
-const rungTicks = ({ rungs }: Ladder): number[] => {
-  const every = Math.ceil(rungs.length / 7);
-  return rungs
-    .filter((_, k) => (rungs.length - 1 - k) % every === 0)
-    .map(({ stepsPerOrbit }) => stepsPerOrbit);
-};
-
-/** Labels at the right, moved apart where they would cover each other; positions on the logarithmic axis. */
-function spread(ends: readonly Point[], [low, high]: readonly [number, number]): (Point & { at: number })[] {
-  const height = Math.log10(high / low);
-  const least = height / 22;
-  const sorted = ends
-    .map((end) => ({ ...end, place: Math.log10(end.error / low) }))
-    .sort((a, b) => a.place - b.place);
-  for (let k = 1; k < sorted.length; k++) {
-    sorted[k]!.place = Math.max(sorted[k]!.place, sorted[k - 1]!.place + least);
-  }
-  const over = Math.max(0, (sorted.at(-1)?.place ?? 0) - height + least / 2);
-  return sorted.map(({ place, ...end }) => ({ ...end, at: low * 10 ** Math.max(0, place - over) }));
-}
-
-function alternative({ ladders }: ClaimResult, own: Ladder | null): string {
-  const said = own === null ? "" : ` ${own.method}: ${own.says}`;
-  return `Error against steps an orbit on logarithmic axes for ${ladders.map(({ method }) => method).join(", ")}.${said}`;
+function alternative(ladders: readonly Ladder[], own: Ladder | null, isChange: boolean): string {
+  const what = isChange ? "Change from rung to rung" : "Distance from the best value";
+  const others = ladders.filter((ladder) => ladder !== own).map(({ method }) => method);
+  return typeset(
+    `${what} against steps an orbit, both logarithmic. ${own === null ? "" : `The author's ${own.method}: ${own.says} `}${others.length === 0 ? "" : `Witnesses: ${others.join(", ")}.`}`,
+  );
 }

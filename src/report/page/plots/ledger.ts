@@ -1,25 +1,42 @@
 import type { LedgerEntry } from "../../../result/result.js";
-import { type Canvas, draw, tick } from "./frame.js";
+import { typeset } from "../typeset.js";
+import { spaced } from "../words.js";
+import { linearTicks } from "./axes.js";
+import { type Canvas, draw } from "./frame.js";
 
-/** Relative change of one conserved quantity over the span. */
+/** Relative change of one conserved quantity over the span: a small panel. */
 export function ledgerPlot(canvas: Canvas, entry: LedgerEntry): string | null {
   const { orbits, change } = entry.series;
   if (orbits.length < 2) return null;
-  const points = orbits.map((orbit, i) => ({ orbit, change: change[i]! }));
-  const { plot } = canvas;
-  return draw(
-    canvas,
-    `Relative change of the ${entry.quantity.replaceAll("-", " ")} against orbits. ${entry.says}`,
-    {
-      height: 190,
-      marginRight: 24,
-      x: { label: "orbits →", ticks: 8 },
-      y: { label: "↑ relative change", tickFormat: tick, ticks: 4, nice: true },
+  const low = Math.min(0, ...change);
+  const high = Math.max(0, ...change);
+  // A quantity that did not change at all still has its line.
+  const span = high - low || Number.EPSILON;
+  const y: [number, number] = [low - span * 0.04, high + span * 0.04];
+  const ticks = linearTicks(...y, 4);
+  const last = orbits.at(-1)!;
+  const across = linearTicks(0, last, 5);
+  return draw(canvas, {
+    id: `ledger-${entry.quantity}`,
+    title: `Relative change of the ${spaced(entry.quantity)}`,
+    says: typeset(entry.says),
+    sizes: ["narrow"],
+    build: (plot) => ({
+      height: 200,
+      marginLeft: 44,
+      marginRight: 14,
+      x: { domain: [0, last], label: "orbits →", ticks: across.values, tickFormat: across.format },
+      y: {
+        domain: y,
+        label: `↑ relative change${ticks.factor}`,
+        ticks: ticks.values,
+        tickFormat: ticks.format,
+      },
       marks: [
-        plot.gridY({ strokeOpacity: 0.1 }),
-        plot.ruleY([0], { strokeOpacity: 0.5 }),
-        plot.line(points, { x: "orbit", y: "change", stroke: "currentColor", strokeWidth: 1 }),
+        plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+        plot.ruleY([0], { stroke: "var(--soft)" }),
+        plot.line(change, { x: [...orbits], y: [...change], stroke: "var(--own)", strokeWidth: 1.2 }),
       ],
-    } as never,
-  );
+    }),
+  });
 }

@@ -1,50 +1,90 @@
 import type { ClaimResult, PassageSeries } from "../../../result/result.js";
-import { type Canvas, draw, tick } from "./frame.js";
+import { size as inWords } from "../../../result/words.js";
+import { typeset } from "../typeset.js";
+import { linearTicks } from "./axes.js";
+import { type Canvas, draw } from "./frame.js";
+import { spread } from "./labels.js";
 
 /** The apsidal angle from passage to passage, less whole turns, of the author's run and its null run. */
 export function passagesPlot(canvas: Canvas, { passages, claimed }: ClaimResult): string | null {
-  if (passages === null || claimed === null) return null;
-  const { plot } = canvas;
-  const rows = ({ number, angle }: PassageSeries) => thin(number.map((k, i) => ({ k, angle: angle[i]! })));
-  const run = rows(passages.solution);
-  const base = passages.null === null ? [] : rows(passages.null);
+  if (passages === null || claimed === null || passages.solution.number.length < 2) return null;
+  const line = (label: string, { number, angle }: PassageSeries, ink: string, dash: string) => ({
+    label,
+    ink,
+    dash,
+    number: thin(number),
+    angle: thin(angle),
+  });
+  const lines = [
+    line("solution", passages.solution, "var(--own)", ""),
+    ...(passages.null === null ? [] : [line("null run", passages.null, "var(--null)", "5 3")]),
+  ];
+  const angles = lines.flatMap(({ angle }) => angle);
+  const low = Math.min(0, ...angles);
+  const high = Math.max(0, ...angles);
+  const y: [number, number] = [low, high === low ? low + 1 : high];
+  const first = Math.min(...lines.map(({ number }) => number[0]!));
+  const last = Math.max(...lines.map(({ number }) => number.at(-1)!));
   const unit = claimed.unit.split("/")[0];
-  return draw(
-    canvas,
-    "Apsidal angle less whole turns against the passage number, for the run and its null run.",
-    {
-      height: 260,
-      x: { label: "passage →", ticks: 8 },
-      y: { label: `↑ apsidal angle, ${unit}`, tickFormat: tick, ticks: 6 },
-      marks: [
-        plot.gridY({ strokeOpacity: 0.1 }),
-        plot.ruleY([0], { strokeOpacity: 0.5 }),
-        plot.line(base, { x: "k", y: "angle", stroke: "currentColor", strokeDasharray: "2 3" }),
-        plot.line(run, { x: "k", y: "angle", stroke: "currentColor", strokeWidth: 1.6 }),
-        plot.text(run.slice(-1), {
-          x: "k",
-          y: "angle",
-          text: () => "run",
-          dx: 8,
-          textAnchor: "start",
-          fill: "currentColor",
-        } as never),
-        plot.text(base.slice(-1), {
-          x: "k",
-          y: "angle",
-          text: () => "null run",
-          dx: 8,
-          textAnchor: "start",
-          fill: "currentColor",
-        } as never),
-      ],
-    } as never,
-  );
+  const ends = lines
+    .map(
+      ({ label, number, angle }) =>
+        `${label} ${typeset(inWords(angle.at(-1)!))} ${unit} at passage ${number.at(-1)}`,
+    )
+    .join(", ");
+  return draw(canvas, {
+    id: "passages",
+    title: "Apsidal angle, less whole turns, from passage to passage",
+    says: `From 0 at passage ${first}: ${ends}.`,
+    build: (plot, size) => {
+      const height = size === "wide" ? 300 : 260;
+      const ticks = linearTicks(...y, 5);
+      const across = linearTicks(first, last, size === "wide" ? 8 : 4);
+      const places = spread(
+        lines.map(({ angle }) => (angle.at(-1)! - y[0]) / (y[1] - y[0])),
+        16 / (height - 72),
+      );
+      return {
+        height,
+        marginLeft: 52,
+        marginRight: 72,
+        x: { domain: [first, last], label: "passage →", ticks: across.values, tickFormat: across.format },
+        y: { domain: y, label: `↑ ${unit}${ticks.factor}`, ticks: ticks.values, tickFormat: ticks.format },
+        marks: [
+          plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          plot.ruleY([0], { stroke: "var(--soft)" }),
+          ...lines.toReversed().map(({ number, angle, ink, dash }) =>
+            plot.line(number, {
+              x: [...number],
+              y: [...angle],
+              stroke: ink,
+              strokeWidth: 1.8,
+              strokeDasharray: dash,
+            }),
+          ),
+          ...lines.map(({ label, ink }, k) =>
+            plot.text([label], {
+              x: last,
+              y: y[0] + places[k]! * (y[1] - y[0]),
+              text: [label],
+              textAnchor: "start",
+              dx: 7,
+              fill: ink,
+              fontWeight: "bold",
+            }),
+          ),
+        ],
+      };
+    },
+  });
 }
 
+/** More points than this are not told apart at the widest. */
 const MOST = 400;
 
-function thin<T>(points: readonly T[]): readonly T[] {
-  if (points.length <= MOST) return points;
-  return Array.from({ length: MOST }, (_, i) => points[Math.round((i * (points.length - 1)) / (MOST - 1))]!);
+/** Angles run in a line with little to hide between two passages: every n-th will do, the last with them. */
+function thin(values: readonly number[]): readonly number[] {
+  if (values.length <= MOST) return values;
+  const last = values.length - 1;
+  return Array.from({ length: MOST }, (_, k) => values[Math.round((k * last) / (MOST - 1))]!);
 }
