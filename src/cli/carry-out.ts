@@ -4,7 +4,6 @@ import { type ReadOutcome, readClaim } from "../claim/read.js";
 import { toJson } from "../report/json.js";
 import { removeUnfinished } from "../report/write.js";
 import type { ClaimResult } from "../result/result.js";
-import { auditAll } from "./audit-all.js";
 import { claimFiles } from "./claim-files.js";
 import { tryWriting, writeTo } from "./destination.js";
 import { EXIT, leaveWith } from "./exit.js";
@@ -63,14 +62,18 @@ async function auditFiles(
     if (!outcome.ok) for (const problem of outcome.problems) say(formatProblem(problem));
     outcomes.push(outcome);
   }
+  if (outcomes.some(({ ok }) => !ok)) leaveWith(EXIT.inputWrong);
+  if (options.json === null && outcomes.every(({ ok }) => !ok)) return;
+
+  const { auditAll } = await import("./audit-all.js");
   const results: ClaimResult[] = [];
   const workers = options.workers ?? availableParallelism();
   for await (const result of auditAll(outcomes, workers, progress, () => folder?.prepare())) {
     results.push(result);
-    if (result.setup === null) {
-      // No audit was carried out; what could not be read has been told above.
+    if (result.setup === null && outcomes[results.length - 1]!.ok) {
+      // A claim that reads well and cannot be run, such as one whose step is longer than its orbit.
       leaveWith(EXIT.inputWrong);
-      if (outcomes[results.length - 1]!.ok) say(`${result.file}: ${result.reason}`);
+      say(`${result.file}: ${result.reason}`);
     }
     folder?.add(result);
     progress.clear();
