@@ -1,5 +1,5 @@
 import type { ClaimResult, Ladder, LedgerEntry } from "../../result/result.js";
-import { bestInWords, figure, size } from "../../result/words.js";
+import { size } from "../../result/words.js";
 import { BUDGET_WORDS } from "./words.js";
 
 /** Captions say what to look for in this case: each is written from its figures. */
@@ -90,12 +90,3 @@ export function budgetCaption({ budget, claimed }: ClaimResult): string {
     ? `The total, ${size(budget.total)} ${claimed.unit}, is ${size(ratio)} of what a third of the margin allows; most of it is ${dominant}.`
     : `The total, ${size(budget.total)} ${claimed.unit}, is ${size(ratio)} times what a third of the margin allows; ${dominant} is what would have to shrink.`;
 }
-
-/** One line for the top of the page: the best value in words. */
-export function bestLine({ best, claimed }: ClaimResult): string {
-  if (best.value === null || best.halfWidth === null || claimed === null) return "none";
-  return `${bestInWords({ value: best.value, halfWidth: best.halfWidth }, claimed)} ± ${size(best.halfWidth)}`;
-}
-
-export const inUnit = (value: number | null, claimed: ClaimResult["claimed"]): string =>
-  value === null ? "none" : figure(value, (claimed?.halfWidth ?? 1) / 100);

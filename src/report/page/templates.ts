@@ -6,7 +6,6 @@ type Template = (context: object) => string;
 const folder = new URL("../../../templates/", import.meta.url);
 const compiled = new Map<string, Promise<Template>>();
 const handlebars = Handlebars.create();
-handlebars.registerHelper("isMeasured", (basis: string) => basis === "measured");
 
 const PARTIALS = ["style", "plot", "notice"];
 let partials: Promise<void> | undefined;

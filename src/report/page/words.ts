@@ -1,4 +1,4 @@
-import type { BudgetPart, Outcome, Verdict } from "../../result/result.js";
+import type { BudgetPart, Outcome, RungStatus, Verdict } from "../../result/result.js";
 
 export const VERDICT_TITLES: Readonly<Record<Verdict, string>> = {
   resolved: "Resolved",
@@ -10,7 +10,7 @@ export const VERDICT_TITLES: Readonly<Record<Verdict, string>> = {
 
 export const OUTCOME_TITLES: Readonly<Record<Outcome, string>> = {
   pass: "passes",
-  caution: "passes, with caution",
+  caution: "caution",
   fail: "fails",
   "not-checked": "not checked",
 };
@@ -25,3 +25,12 @@ export const BUDGET_WORDS: Readonly<Record<BudgetPart, string>> = {
 
 /** A catalog or ledger name as words. */
 export const spaced = (name: string): string => name.replaceAll("-", " ");
+
+export const STATUS_WORDS: Readonly<Record<RungStatus, string>> = {
+  ok: "ok",
+  escaped: "escaped",
+  "non-finite": "non-finite",
+  "too-few-passages": "too few passages",
+  "timed-out": "timed out",
+  unconverged: "unconverged",
+};

@@ -5,7 +5,7 @@ import { linearTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 
 /** Relative change of one conserved quantity over the span: a small panel. */
-export function ledgerPlot(canvas: Canvas, entry: LedgerEntry): string | null {
+export function ledgerPlot(canvas: Canvas, entry: LedgerEntry, index: number): string | null {
   const { orbits, change } = entry.series;
   if (orbits.length < 2) return null;
   const low = Math.min(0, ...change);
@@ -17,7 +17,7 @@ export function ledgerPlot(canvas: Canvas, entry: LedgerEntry): string | null {
   const last = orbits.at(-1)!;
   const across = linearTicks(0, last, 5);
   return draw(canvas, {
-    id: `ledger-${entry.quantity}`,
+    id: `ledger-${index}`,
     title: `Relative change of the ${spaced(entry.quantity)}`,
     says: typeset(entry.says),
     sizes: ["narrow"],

@@ -1,0 +1,61 @@
+import type { ClaimResult } from "../../result/result.js";
+import { bestInWords, figure, size } from "../../result/words.js";
+import { typeset } from "./typeset.js";
+
+/** One line of the table of figures. */
+export interface FigureRow {
+  readonly name: string;
+  readonly value: string;
+  /** Half-width, empty where there is none. */
+  readonly margin: string;
+  readonly note: string;
+}
+
+export const NONE = "none";
+
+/** The claimed and recomputed figures, all in the claim's unit. */
+export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): readonly FigureRow[] {
+  if (claimed === null) return [];
+  const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
+  const number = (value: number | null): string => (value === null ? NONE : typeset(figure(value, fine)));
+  const margin = (halfWidth: number | null): string =>
+    halfWidth === null ? "" : `± ${typeset(size(halfWidth))}`;
+  const subtracted = claimed.baseline === "subtracted";
+  const row = (name: string, value: string, half: number | null, note: string): FigureRow => ({
+    name,
+    value,
+    margin: margin(half),
+    note,
+  });
+  return [
+    row(
+      "claimed",
+      typeset(String(claimed.value)),
+      claimed.halfWidth,
+      subtracted ? "a null run taken off, as the claim says" : "as it came out, no null run taken off",
+    ),
+    row(
+      "as solved",
+      number(asSolved.value),
+      null,
+      setup?.method
+        ? `${setup.method.name} at the author's step${subtracted ? ", less its null run" : ""}`
+        : "the claim gives no solution",
+    ),
+    row("null run", number(asSolved.null), null, "the same method and step, the effect switched off"),
+    row(
+      "best value",
+      best.value === null
+        ? NONE
+        : typeset(bestInWords({ value: best.value, halfWidth: best.halfWidth ?? 0 }, claimed)),
+      best.halfWidth,
+      typeset(best.says),
+    ),
+    row(
+      "numerical error",
+      asSolved.error === null ? NONE : typeset(size(asSolved.error)),
+      asSolved.halfWidth,
+      "as solved less the best value",
+    ),
+  ];
+}

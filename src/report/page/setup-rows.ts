@@ -1,0 +1,42 @@
+import type { ClaimResult } from "../../result/result.js";
+import { stepsPerOrbit } from "./rung-tables.js";
+
+interface Row {
+  readonly name: string;
+  readonly value: string;
+}
+
+/** What was run and with what, every number in full. */
+export function setupRows({ setup }: ClaimResult): readonly Row[] {
+  if (setup === null) return [];
+  const { method, stepsPerOrbit: count, step } = setup;
+  const amounts = (list: typeof setup.start): Row[] =>
+    list.map(({ name, value, unit }) => ({ name, value: unit === "1" ? String(value) : `${value} ${unit}` }));
+  const perOrbit = count === null ? "" : `${stepsPerOrbit(count)} steps an orbit`;
+  return [
+    { name: "equations", value: `${setup.equations.title} (${setup.equations.name}, ${formOf(setup)})` },
+    ...amounts(setup.parameters),
+    ...amounts(setup.start).map(({ name, value }) => ({ name: `start ${name}`, value })),
+    { name: "span", value: setup.span },
+    { name: "null run", value: setup.nullRun },
+    {
+      name: "method",
+      value: method ? `${method.title} (${method.name}, order ${method.order})` : "not given",
+    },
+    {
+      name: "step",
+      value:
+        step === null ? "not given" : /orbit/.test(step) ? step : [step, perOrbit].filter(Boolean).join(", "),
+    },
+  ];
+}
+
+const formOf = ({ equations }: NonNullable<ClaimResult["setup"]>): string =>
+  equations.form === "angle" ? "the angle as the independent variable" : "in time";
+
+/** Published sources of the equations and of every method that ran. */
+export function sourceRows({ setup }: ClaimResult): readonly Row[] {
+  if (setup === null) return [];
+  const methods = setup.method === null ? setup.witnesses : [setup.method, ...setup.witnesses];
+  return [setup.equations, ...methods].map(({ name, source }) => ({ name, value: source }));
+}
