@@ -28,12 +28,13 @@ export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): rea
     note,
   });
   return [
-    row(
-      "claimed",
-      typeset(String(claimed.value)),
-      claimed.halfWidth,
-      subtracted ? "a null run taken off, as the claim says" : "as it came out, no null run taken off",
-    ),
+    {
+      name: "claimed",
+      value: typeset(String(claimed.value)),
+      // As the author gave it, without digits of ours.
+      margin: `± ${typeset(String(Number(claimed.halfWidth.toPrecision(3))))}`,
+      note: subtracted ? "a null run taken off, as the claim says" : "as it came out, no null run taken off",
+    },
     row(
       "as solved",
       number(asSolved.value),

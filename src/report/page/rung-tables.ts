@@ -7,8 +7,9 @@ export interface RungTable {
   readonly method: string;
   readonly role: string;
   readonly says: string;
-  /** Orders, limit and floor in a line. */
-  readonly summary: string;
+  readonly limit: string;
+  /** Orders and rounding in a line. */
+  readonly orders: string;
   readonly isSolution: boolean;
   readonly hasNull: boolean;
   readonly rows: readonly RungRow[];
@@ -38,12 +39,13 @@ export function rungTables({ ladders, claimed, best }: ClaimResult): readonly Ru
       method: ladder.method,
       role: ladder.role === "solution" ? "the author's method" : "witness",
       says: typeset(ladder.says),
-      summary: summaryOf(ladder, claimed.unit),
+      limit: limitOf(ladder),
+      orders: ordersOf(ladder, claimed.unit),
       isSolution: ladder.role === "solution",
       hasNull: ladder.rungs.some((rung) => rung.null !== null),
       rows: ladder.rungs.map((rung, k) =>
         rowOf(rung, {
-          fine: Math.max(ladder.floor ?? 0, claimed.halfWidth / 1000),
+          fine: Math.max(ladder.floor ?? 0, rung.standardError ?? 0, claimed.halfWidth / 1000),
           best: best.value,
           inWindow: ladder.window !== null && k >= ladder.window[0] && k <= ladder.window[1],
         }),
@@ -51,23 +53,26 @@ export function rungTables({ ladders, claimed, best }: ClaimResult): readonly Ru
     }));
 }
 
-function summaryOf(ladder: Ladder, unit: string): string {
-  const { formalOrder, stateOrder, figureOrder, figureOrderInterval: interval, extrapolated, floor } = ladder;
+function ordersOf(
+  { formalOrder, stateOrder, figureOrder, figureOrderInterval: interval, floor }: Ladder,
+  unit: string,
+): string {
+  const range = interval === null ? "" : ` (95 %: ${interval[0].toFixed(2)} to ${interval[1].toFixed(2)})`;
   const parts = [
-    `formal order ${formalOrder}`,
+    `Formal order ${formalOrder}`,
     stateOrder === null ? "no state order measured" : `state order ${stateOrder.toFixed(2)}`,
-    figureOrder === null
-      ? "no figure order measured"
-      : `figure order ${figureOrder.toFixed(2)}${
-          interval === null ? "" : ` (95 %: ${interval[0].toFixed(2)} to ${interval[1].toFixed(2)})`
-        }`,
-    extrapolated === null
-      ? "no limit"
-      : `limit ${figure(extrapolated.value, extrapolated.halfWidth)} ± ${size(extrapolated.halfWidth)} ${unit}`,
-    floor === null ? "rounding not measured" : `rounding ${size(floor)} ${unit}`,
+    figureOrder === null ? "no figure order measured" : `figure order ${figureOrder.toFixed(2)}${range}`,
+    floor === null ? "rounding not measured" : `rounding worth ${size(floor)} ${unit} at the finest rung`,
   ];
   return typeset(`${parts.join("; ")}.`);
 }
+
+const limitOf = ({ extrapolated }: Ladder): string =>
+  extrapolated === null
+    ? "no limit"
+    : typeset(
+        `limit ${figure(extrapolated.value, extrapolated.halfWidth)} ± ${size(extrapolated.halfWidth)}`,
+      );
 
 interface RowContext {
   readonly fine: number;
@@ -88,7 +93,7 @@ function rowOf(rung: Rung, { fine, best, inWindow }: RowContext): RungRow {
     seconds: rung.seconds < 0.001 ? "< 0.001" : rung.seconds.toFixed(3),
     isAuthors: rung.isAuthors,
     note: [
-      ...(rung.isAuthors ? ["the author's step"] : []),
+      ...(rung.isAuthors ? ["author's"] : []),
       ...(rung.status === "ok" ? [] : [STATUS_WORDS[rung.status]]),
       ...(inWindow ? ["window"] : []),
     ].join(", "),

@@ -1,5 +1,6 @@
 import type { ClaimResult } from "../../result/result.js";
 import { stepsPerOrbit } from "./rung-tables.js";
+import { typeset } from "./typeset.js";
 
 interface Row {
   readonly name: string;
@@ -11,7 +12,10 @@ export function setupRows({ setup }: ClaimResult): readonly Row[] {
   if (setup === null) return [];
   const { method, stepsPerOrbit: count, step } = setup;
   const amounts = (list: typeof setup.start): Row[] =>
-    list.map(({ name, value, unit }) => ({ name, value: unit === "1" ? String(value) : `${value} ${unit}` }));
+    list.map(({ name, value, unit }) => ({
+      name,
+      value: typeset(unit === "1" ? inFull(value) : `${inFull(value)} ${unit}`),
+    }));
   const perOrbit = count === null ? "" : `${stepsPerOrbit(count)} steps an orbit`;
   return [
     { name: "equations", value: `${setup.equations.title} (${setup.equations.name}, ${formOf(setup)})` },
@@ -30,6 +34,9 @@ export function setupRows({ setup }: ClaimResult): readonly Row[] {
     },
   ];
 }
+
+/** Every digit, in powers of ten where the plain number would be a row of noughts. */
+const inFull = (value: number): string => (Math.abs(value) >= 1e15 ? value.toExponential() : String(value));
 
 const formOf = ({ equations }: NonNullable<ClaimResult["setup"]>): string =>
   equations.form === "angle" ? "the angle as the independent variable" : "in time";

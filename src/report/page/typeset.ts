@@ -17,7 +17,7 @@ export const superscript = (exponent: number): string =>
   [...String(exponent)].map((character) => SUPERSCRIPTS[character]).join("");
 
 /**
- * A sentence of ours with its numbers set as on paper: `1.15e-8` as 1.15 × 10⁻⁸, a minus sign for a hyphen
+ * A sentence of ours with its numbers set as on paper: `1.15e-8` as 1.15 × 10⁻⁸, `c^2` as c², a minus sign for a hyphen
  * before a digit. Not for what the claim says in its own words.
  */
 export function typeset(sentence: string): string {
@@ -26,6 +26,7 @@ export function typeset(sentence: string): string {
       /(?<![\w.])(-?\d+(?:\.\d+)?)e([+-]?\d+)(?!\w)/g,
       (_, mantissa: string, exponent: string) => `${mantissa}\u00a0×\u00a010${superscript(Number(exponent))}`,
     )
+    .replaceAll(/\^(-?\d+)/g, (_, exponent: string) => superscript(Number(exponent)))
     .replaceAll(/(?<![\w.)-])-(?=\d)/g, "−");
 }
 

@@ -1,4 +1,5 @@
 import { powerOfTen, superscript } from "../typeset.js";
+import type { Plot } from "./frame.js";
 
 /** Ticks of an axis and how they are written. */
 export interface Ticks {
@@ -15,7 +16,15 @@ export interface Ticks {
 export function linearTicks(low: number, high: number, count: number): Ticks {
   const rough = (high - low) / count;
   const base = 10 ** Math.floor(Math.log10(rough));
-  const step = base * (rough / base < 1.5 ? 1 : rough / base < 3.5 ? 2 : rough / base < 7.5 ? 5 : 10);
+  const step =
+    base *
+    (rough / base < Math.SQRT2
+      ? 1
+      : rough / base < Math.sqrt(10)
+        ? 2
+        : rough / base < Math.sqrt(50)
+          ? 5
+          : 10);
   const first = Math.ceil(low / step - 1e-9);
   const last = Math.floor(high / step + 1e-9);
   const values = Array.from({ length: last - first + 1 }, (_, k) => (first + k) * step);
@@ -64,3 +73,23 @@ export function rungTicks(steps: readonly number[], authors: number | null, most
     factor: "",
   };
 }
+
+/**
+ * The two axes with our own ticks, for an axis of categories none. On a logarithmic scale the library would leave
+ * out every label that is not of a round number.
+ */
+export function axes(
+  plot: Plot,
+  x: { readonly ticks: Ticks; readonly label: string },
+  y: { readonly ticks: Ticks; readonly label: string } | null,
+) {
+  const horizontal = plot.axisX(x.ticks.values, { text: x.ticks.values.map(x.ticks.format), label: x.label });
+  if (y === null) return [plot.gridX(x.ticks.values, GRID), horizontal];
+  return [
+    plot.gridY(y.ticks.values, GRID),
+    horizontal,
+    plot.axisY(y.ticks.values, { text: y.ticks.values.map(y.ticks.format), label: y.label }),
+  ];
+}
+
+const GRID = { stroke: "var(--rule)", strokeOpacity: 1 };

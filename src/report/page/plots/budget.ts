@@ -2,7 +2,7 @@ import type { ClaimResult } from "../../../result/result.js";
 import { size as inWords } from "../../../result/words.js";
 import { typeset } from "../typeset.js";
 import { BUDGET_WORDS } from "../words.js";
-import { logTicks } from "./axes.js";
+import { axes, logTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 
 /** The parts of the uncertainty on a logarithmic axis, beside what the quoted margin allows. */
@@ -28,18 +28,12 @@ export function budgetPlot(canvas: Canvas, { budget, claimed }: ClaimResult): st
       const ticks = logTicks(...x, size === "wide" ? 9 : 5);
       return {
         height: 34 + 26 * parts.length + 42,
-        marginLeft: 92,
+        marginLeft: 100,
         marginRight: 14,
-        x: {
-          type: "log",
-          domain: x,
-          label: `${claimed.unit} →`,
-          ticks: ticks.values,
-          tickFormat: ticks.format,
-        },
+        x: { type: "log", domain: x },
         y: { domain: parts.map(({ name }) => name), label: null, tickSize: 0 },
         marks: [
-          plot.gridX(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          ...axes(plot, { ticks, label: `${claimed.unit} →` }, null),
           ...parts.flatMap(({ name, amount, isDominant }) => [
             plot.barX([name], {
               y: [name],

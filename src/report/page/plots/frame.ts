@@ -1,6 +1,6 @@
 import type * as PlotModule from "@observablehq/plot";
 
-type Plot = typeof PlotModule;
+export type Plot = typeof PlotModule;
 type PlotOptions = PlotModule.PlotOptions;
 
 /** The plotting library and a document to draw in. */

@@ -1,7 +1,7 @@
 import type { ClaimResult } from "../../../result/result.js";
 import { figure, size as inWords } from "../../../result/words.js";
 import { typeset } from "../typeset.js";
-import { linearTicks } from "./axes.js";
+import { axes, linearTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 
 interface Row {
@@ -98,15 +98,17 @@ function axis(
         marginTop: 8,
         marginLeft: 76,
         marginRight: 18,
-        x: {
-          domain,
-          label: `${which === "near" ? "close to the claim, " : ""}${claimed!.unit}${ticks.factor} →`,
-          ticks: ticks.values,
-          tickFormat: ticks.format,
-        },
+        x: { domain },
         y: { domain: rows.map(({ name }) => name), label: null, tickSize: 0 },
         marks: [
-          plot.gridX(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          ...axes(
+            plot,
+            {
+              ticks,
+              label: `${which === "near" ? "close to the claim, " : ""}${claimed!.unit}${ticks.factor} →`,
+            },
+            null,
+          ),
           plot.rectX([claimed!], {
             x1: Math.max(domain[0], claimed!.value - claimed!.halfWidth),
             x2: Math.min(domain[1], claimed!.value + claimed!.halfWidth),
@@ -126,12 +128,18 @@ function axis(
               ),
               { x: (end: number) => end, y: () => row.name, stroke: row.ink, strokeWidth: 2, inset: 8 },
             ),
-            plot.dot([row.name], { x: row.value, y: row.name, symbol: row.symbol, r: 4.5, fill: row.ink }),
+            plot.dot([row.name], {
+              x: [row.value],
+              y: [row.name],
+              symbol: row.symbol,
+              r: 4.5,
+              fill: row.ink,
+            }),
           ]),
           ...outside.map((row) =>
             plot.text([row.name], {
-              x: row.value < domain[0] ? domain[0] : domain[1],
-              y: row.name,
+              x: [row.value < domain[0] ? domain[0] : domain[1]],
+              y: [row.name],
               text: [row.value < domain[0] ? `◂ ${written(row)}` : `${written(row)} ▸`],
               textAnchor: row.value < domain[0] ? "start" : "end",
               dx: row.value < domain[0] ? 4 : -4,

@@ -1,9 +1,10 @@
 import type { ClaimResult, Ladder } from "../../../result/result.js";
 import { typeset } from "../typeset.js";
-import { logTicks, rungTicks } from "./axes.js";
+import { axes, logTicks, rungTicks } from "./axes.js";
 import { distances, type Point } from "./distances.js";
-import { type Canvas, draw } from "./frame.js";
+import { type Canvas, draw, type Plot, type Size } from "./frame.js";
 import { spread, tag } from "./labels.js";
+import { note } from "./notes.js";
 
 interface Line {
   readonly ladder: Ladder;
@@ -11,190 +12,198 @@ interface Line {
   readonly points: readonly Point[];
 }
 
+type Domain = readonly [number, number];
+
+interface Scene {
+  readonly lines: readonly Line[];
+  readonly own: Ladder | null;
+  /** Steps an orbit of the author's rung. */
+  readonly authors: number | null;
+  readonly x: Domain;
+  readonly y: Domain;
+  /** A third of the margin. */
+  readonly third: number;
+  /** Half-width of the best value. */
+  readonly bound: number | null;
+}
+
 /** Distance from the best value against steps an orbit, for the author's method and, quietly, the witnesses. */
 export function ladderPlot(canvas: Canvas, result: ClaimResult): string | null {
-  const { ladders, best, claimed } = result;
+  const scene = sceneOf(result);
+  if (scene === null) return null;
+  const { own, authors, x, y, lines } = scene;
+  const isChange = result.best.value === null;
+  const what = isChange ? "Change from rung to rung" : "Distance from the best value";
+  const unit = result.claimed!.unit;
+  return draw(canvas, {
+    id: "ladder",
+    title: `${what} against the step`,
+    says: alternative(lines, what),
+    build: (plot, size) => {
+      const isWide = size === "wide";
+      const steps = (own ?? lines[0]!.ladder).rungs.map(({ stepsPerOrbit }) => stepsPerOrbit);
+      return {
+        height: HEIGHT[size],
+        marginLeft: 46,
+        marginRight: isWide ? 142 : 54,
+        x: { type: "log", domain: [...x] },
+        y: { type: "log", domain: [...y] },
+        marks: [
+          windowOf(plot, scene),
+          ...axes(
+            plot,
+            { ticks: rungTicks(steps, authors, isWide ? 8 : 4), label: "steps an orbit →" },
+            { ticks: logTicks(...y, isWide ? 9 : 7), label: `↑ ${what.toLowerCase()}, ${unit}` },
+          ),
+          ...levels(plot, scene),
+          ...lines.flatMap((line) => markLine(plot, line)),
+          ...lawLine(plot, scene),
+          ...authorsStep(plot, scene),
+          ...levelNames(plot, scene),
+          ...methodNames(plot, scene, size),
+        ],
+      };
+    },
+  });
+}
+
+const HEIGHT: Readonly<Record<Size, number>> = { wide: 430, narrow: 360 };
+
+function sceneOf({ ladders, best, claimed }: ClaimResult): Scene | null {
   if (claimed === null) return null;
   const lines: Line[] = ladders
     .map((ladder) => ({ ladder, isOwn: ladder.role === "solution", points: distances(ladder, best) }))
     .filter(({ points }) => points.length > 0)
     .toSorted((a, b) => Number(a.isOwn) - Number(b.isOwn));
-  const all = lines.flatMap(({ points }) => points);
-  if (all.length < 2) return null;
+  const points = lines.flatMap((line) => line.points);
+  if (points.length < 2) return null;
   const own = lines.find(({ isOwn }) => isOwn)?.ladder ?? null;
   const third = claimed.halfWidth / 3;
-  const sizes = [...all.map(({ distance }) => distance), third];
-  const y: [number, number] = [Math.min(...sizes) / 2.5, Math.max(...sizes) * 2.5];
+  const heights = [...points.map(({ distance }) => distance), third];
   const steps = ladders.flatMap(({ rungs }) => rungs.map(({ stepsPerOrbit }) => stepsPerOrbit));
-  const x: [number, number] = [Math.min(...steps) / 1.12, Math.max(...steps) * 1.12];
-  const authors = own?.rungs.find(({ isAuthors }) => isAuthors)?.stepsPerOrbit ?? null;
-  const place = (distance: number): number => Math.log(distance / y[0]) / Math.log(y[1] / y[0]);
-  const at = (share: number): number => y[0] * (y[1] / y[0]) ** share;
+  return {
+    lines,
+    own,
+    authors: own?.rungs.find(({ isAuthors }) => isAuthors)?.stepsPerOrbit ?? null,
+    x: [Math.min(...steps) / 1.12, Math.max(...steps) * 1.12],
+    y: [Math.min(...heights) / 2.5, Math.max(...heights) * 2.5],
+    third,
+    bound: best.value === null ? null : best.halfWidth,
+  };
+}
 
-  return draw(canvas, {
-    id: "ladder",
-    title: best.value === null ? "Change of the figure from rung to rung" : "Distance from the best value",
-    says: alternative(
-      lines.map(({ ladder }) => ladder),
-      own,
-      best.value === null,
-    ),
-    build: (plot, size) => {
-      const isWide = size === "wide";
-      const height = isWide ? 430 : 360;
-      const ticks = logTicks(...y, isWide ? 9 : 7);
-      const across = rungTicks(
-        (own ?? lines[0]!.ladder).rungs.map((r) => r.stepsPerOrbit),
-        authors,
-        isWide ? 7 : 4,
-      );
-      const label = (text: string, value: number, edge: "left" | "right") =>
-        plot.text([text], {
-          x: edge === "left" ? x[0] : x[1],
-          y: value,
-          text: [text],
-          textAnchor: edge === "left" ? "start" : "end",
-          dx: edge === "left" ? 5 : -5,
-          dy: -7,
-          fill: "var(--ink)",
-          stroke: "var(--paper)",
-          strokeWidth: 4,
-        });
-      const isShown = (value: number | null): value is number =>
-        value !== null && value >= y[0] && value <= y[1];
-      const floor = own?.floor ?? null;
-      const bound = best.value === null ? null : best.halfWidth;
-      const ends = lines.map(({ points }) => points.at(-1)!);
-      const places = spread(
-        ends.map(({ distance }) => place(distance)),
-        15 / (height - 72),
-      );
-      return {
-        height,
-        marginLeft: 46,
-        marginRight: isWide ? 142 : 54,
-        x: {
-          type: "log",
-          domain: x,
-          label: "steps an orbit →",
-          ticks: across.values,
-          tickFormat: across.format,
-        },
-        y: {
-          type: "log",
-          domain: y,
-          label: `↑ ${best.value === null ? "change to the next rung" : "distance from the best value"}, ${claimed.unit}`,
-          ticks: ticks.values,
-          tickFormat: ticks.format,
-        },
-        marks: [
-          ...(own === null || own.window === null
-            ? []
-            : [
-                plot.rectX([own], {
-                  x1: Math.max(x[0], own.rungs[own.window[0]]!.stepsPerOrbit / 1.06),
-                  x2: Math.min(x[1], own.rungs[own.window[1]]!.stepsPerOrbit * 1.06),
-                  fill: "var(--wash)",
-                }),
-              ]),
-          plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
-          ...(isShown(bound)
-            ? [plot.rectY([bound], { y1: y[0], y2: bound, fill: "var(--quiet)", fillOpacity: 0.22 })]
-            : []),
-          plot.ruleY([third], { stroke: "var(--ink)", strokeDasharray: "6 3" }),
-          ...(isShown(floor) ? [plot.ruleY([floor], { stroke: "var(--ink)", strokeDasharray: "1 3" })] : []),
-          ...(authors === null ? [] : [plot.ruleX([authors], { stroke: "var(--own)", strokeOpacity: 0.55 })]),
-          ...lines.flatMap(({ points, isOwn }) => markLine(points, isOwn)),
-          ...(own === null ? [] : [lawOf(own, y)].map((law) => lawLine(law))),
-          ...lines.flatMap(({ points }, k) =>
-            points
-              .filter(({ n }) => lines[k]!.isOwn && n === authors)
-              .map(({ n, distance }) =>
-                plot.dot([n], { x: n, y: distance, r: 8, stroke: "var(--own)", strokeWidth: 2 }),
-              ),
-          ),
-          label("a third of the margin", third, "left"),
-          ...(isShown(floor) ? [label(isWide ? "rounding floor" : "rounding", floor, "right")] : []),
-          ...(isShown(bound) ? [label("best value ±", bound, "left")] : []),
-          ...(authors === null
-            ? []
-            : [
-                plot.text([authors], {
-                  x: authors,
-                  frameAnchor: "top",
-                  dy: 6,
-                  dx: authors > Math.sqrt(x[0] * x[1]) ? -5 : 5,
-                  textAnchor: authors > Math.sqrt(x[0] * x[1]) ? "end" : "start",
-                  text: ["author's step"],
-                  fill: "var(--own)",
-                  stroke: "var(--paper)",
-                  strokeWidth: 4,
-                }),
-              ]),
-          ...lines.flatMap(({ ladder, isOwn }, k) => [
-            plot.link([ladder], {
-              x1: ends[k]!.n,
-              y1: ends[k]!.distance,
-              x2: x[1],
-              y2: at(places[k]!),
-              stroke: "var(--quiet)",
-              strokeWidth: 0.6,
-            }),
-            plot.text([ladder], {
-              x: x[1],
-              y: at(places[k]!),
-              text: [isWide ? ladder.method : tag(ladder.method)],
-              textAnchor: "start",
-              dx: 4,
-              fill: isOwn ? "var(--own)" : "var(--soft)",
-              fontWeight: isOwn ? "bold" : "normal",
-            }),
-          ]),
-        ],
-      };
+const isShown = (level: number | null | undefined, [low, high]: Domain): level is number =>
+  level !== null && level !== undefined && level >= low && level <= high;
 
-      function markLine(points: readonly Point[], isOwn: boolean) {
-        const channels = { x: points.map(({ n }) => n), y: points.map(({ distance }) => distance) };
-        return isOwn
-          ? [
-              plot.line(points, { ...channels, stroke: "var(--own)", strokeWidth: 2 }),
-              plot.dot(points, { ...channels, r: 3.6, fill: "var(--own)" }),
-            ]
-          : [
-              plot.line(points, { ...channels, stroke: "var(--quiet)", strokeWidth: 1 }),
-              plot.dot(points, { ...channels, r: 1.8, fill: "var(--quiet)" }),
-            ];
-      }
-
-      function lawLine(law: readonly Point[]) {
-        return plot.line(law, {
-          x: law.map(({ n }) => n),
-          y: law.map(({ distance }) => distance),
-          stroke: "var(--ink)",
-          strokeWidth: 1.2,
-          strokeDasharray: "4 4",
-        });
-      }
-    },
+function windowOf(plot: Plot, { own, x }: Scene) {
+  const window = own?.window ?? null;
+  if (own === null || window === null) return null;
+  return plot.rectX([own], {
+    x1: [Math.max(x[0], own.rungs[window[0]]!.stepsPerOrbit / 1.06)],
+    x2: [Math.min(x[1], own.rungs[window[1]]!.stepsPerOrbit * 1.06)],
+    fill: "var(--wash)",
   });
 }
 
-/** The fitted law over the window, as far as it lies inside the plot. */
-function lawOf(
-  { coefficient, figureOrder, window, rungs }: Ladder,
-  [low, high]: readonly [number, number],
-): Point[] {
-  if (coefficient === null || figureOrder === null || window === null) return [];
-  return rungs
-    .slice(window[0], window[1] + 1)
-    .map(({ stepsPerOrbit: n }) => ({ n, distance: Math.abs(coefficient) * n ** -figureOrder }))
-    .filter(({ distance }) => distance >= low && distance <= high);
+function levels(plot: Plot, { own, y, third, bound }: Scene) {
+  return [
+    isShown(bound, y)
+      ? plot.rectY([bound], { y1: [y[0]], y2: [bound], fill: "var(--quiet)", fillOpacity: 0.22 })
+      : null,
+    plot.ruleY([third], { stroke: "var(--ink)", strokeDasharray: "6 3" }),
+    isShown(own?.floor, y)
+      ? plot.ruleY([own!.floor!], { stroke: "var(--ink)", strokeDasharray: "1 3" })
+      : null,
+  ];
 }
 
-function alternative(ladders: readonly Ladder[], own: Ladder | null, isChange: boolean): string {
-  const what = isChange ? "Change from rung to rung" : "Distance from the best value";
-  const others = ladders.filter((ladder) => ladder !== own).map(({ method }) => method);
-  return typeset(
-    `${what} against steps an orbit, both logarithmic. ${own === null ? "" : `The author's ${own.method}: ${own.says} `}${others.length === 0 ? "" : `Witnesses: ${others.join(", ")}.`}`,
-  );
+function levelNames(plot: Plot, { own, x, y, third, bound }: Scene) {
+  const floor = own?.floor;
+  return [
+    note(plot, "a third of the margin", { x: x[0], y: third, side: "right" }),
+    isShown(floor, y) ? note(plot, "rounding floor", { x: x[1], y: floor, side: "left" }) : null,
+    isShown(bound, y) ? note(plot, "± best value", { x: x[0], y: bound, side: "right" }) : null,
+  ];
+}
+
+function markLine(plot: Plot, { points, isOwn }: Line) {
+  const ink = isOwn ? "var(--own)" : "var(--quiet)";
+  const channels = { x: points.map(({ n }) => n), y: points.map(({ distance }) => distance) };
+  return [
+    plot.line(points, { ...channels, stroke: ink, strokeWidth: isOwn ? 2 : 1 }),
+    plot.dot(points, { ...channels, r: isOwn ? 3.6 : 1.8, fill: ink }),
+  ];
+}
+
+/** The fitted law, drawn beyond its window by one rung each way, to be told from the line that it fits. */
+function lawLine(plot: Plot, { own, y }: Scene) {
+  if (own === null) return [];
+  const { coefficient, figureOrder: order, window, rungs } = own;
+  if (coefficient === null || order === null || window === null) return [];
+  const at = (n: number): Point => ({ n, distance: Math.abs(coefficient) * n ** -order });
+  const law = rungs
+    .slice(Math.max(0, window[0] - 1), window[1] + 2)
+    .map(({ stepsPerOrbit }) => at(stepsPerOrbit))
+    .filter(({ distance }) => isShown(distance, y));
+  const middle = law[Math.floor(law.length / 3)];
+  return [
+    plot.line(law, {
+      x: law.map(({ n }) => n),
+      y: law.map(({ distance }) => distance),
+      stroke: "var(--ink)",
+      strokeDasharray: "5 4",
+    }),
+    middle === undefined
+      ? null
+      : note(plot, `order ${order.toFixed(2)}`, { x: middle.n, y: middle.distance, side: "right", dx: 8 }),
+  ];
+}
+
+function authorsStep(plot: Plot, { lines, authors, x, y }: Scene) {
+  if (authors === null) return [];
+  const point = lines.find(({ isOwn }) => isOwn)?.points.find(({ n }) => n === authors);
+  const side = authors > Math.sqrt(x[0] * x[1]) ? "left" : "right";
+  return [
+    plot.ruleX([authors], { stroke: "var(--own)", strokeOpacity: 0.55 }),
+    point === undefined
+      ? null
+      : plot.dot([point], { x: [point.n], y: [point.distance], r: 8, stroke: "var(--own)", strokeWidth: 2 }),
+    note(plot, "author's step", { x: authors, y: y[1], side, dy: 8, ink: "var(--own)" }),
+  ];
+}
+
+/** Names at the right end, apart from each other, each with a hair to the end of its line. */
+function methodNames(plot: Plot, { lines, x, y }: Scene, size: Size) {
+  const height = Math.log(y[1] / y[0]);
+  const ends = lines.map(({ points }) => points.at(-1)!);
+  const places = spread(
+    ends.map(({ distance }) => Math.log(distance / y[0]) / height),
+    15 / (HEIGHT[size] - 72),
+  ).map((share) => y[0] * Math.exp(share * height));
+  return lines.flatMap(({ ladder, isOwn }, k) => [
+    plot.link([ladder], {
+      x1: [ends[k]!.n],
+      y1: [ends[k]!.distance],
+      x2: [x[1]],
+      y2: [places[k]!],
+      stroke: "var(--quiet)",
+      strokeWidth: 0.6,
+    }),
+    note(plot, size === "wide" ? ladder.method : tag(ladder.method), {
+      x: x[1],
+      y: places[k]!,
+      side: "right",
+      dy: 0,
+      ink: isOwn ? "var(--own)" : "var(--soft)",
+      isBold: isOwn,
+    }),
+  ]);
+}
+
+function alternative(lines: readonly Line[], what: string): string {
+  const own = lines.find(({ isOwn }) => isOwn)?.ladder;
+  const others = lines.filter(({ isOwn }) => !isOwn).map(({ ladder }) => ladder.method);
+  const author = own === undefined ? "" : ` The author's ${own.method}: ${own.says}`;
+  const witnesses = others.length === 0 ? "" : ` Witnesses: ${others.join(", ")}.`;
+  return typeset(`${what} against steps an orbit, both logarithmic.${author}${witnesses}`);
 }

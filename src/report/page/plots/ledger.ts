@@ -1,7 +1,7 @@
 import type { LedgerEntry } from "../../../result/result.js";
 import { typeset } from "../typeset.js";
 import { spaced } from "../words.js";
-import { linearTicks } from "./axes.js";
+import { axes, linearTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 
 /** Relative change of one conserved quantity over the span: a small panel. */
@@ -13,7 +13,7 @@ export function ledgerPlot(canvas: Canvas, entry: LedgerEntry, index: number): s
   // A quantity that did not change at all still has its line.
   const span = high - low || Number.EPSILON;
   const y: [number, number] = [low - span * 0.04, high + span * 0.04];
-  const ticks = linearTicks(...y, 4);
+  const ticks = linearTicks(...y, 3);
   const last = orbits.at(-1)!;
   const across = linearTicks(0, last, 5);
   return draw(canvas, {
@@ -25,15 +25,14 @@ export function ledgerPlot(canvas: Canvas, entry: LedgerEntry, index: number): s
       height: 200,
       marginLeft: 44,
       marginRight: 14,
-      x: { domain: [0, last], label: "orbits →", ticks: across.values, tickFormat: across.format },
-      y: {
-        domain: y,
-        label: `↑ relative change${ticks.factor}`,
-        ticks: ticks.values,
-        tickFormat: ticks.format,
-      },
+      x: { domain: [0, last] },
+      y: { domain: y },
       marks: [
-        plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+        ...axes(
+          plot,
+          { ticks: across, label: "orbits →" },
+          { ticks, label: `↑ ${spaced(entry.quantity)}, relative change${ticks.factor}` },
+        ),
         plot.ruleY([0], { stroke: "var(--soft)" }),
         plot.line(change, { x: [...orbits], y: [...change], stroke: "var(--own)", strokeWidth: 1.2 }),
       ],

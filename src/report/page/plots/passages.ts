@@ -1,7 +1,7 @@
 import type { ClaimResult, PassageSeries } from "../../../result/result.js";
 import { size as inWords } from "../../../result/words.js";
 import { typeset } from "../typeset.js";
-import { linearTicks } from "./axes.js";
+import { axes, linearTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 import { spread } from "./labels.js";
 
@@ -48,10 +48,14 @@ export function passagesPlot(canvas: Canvas, { passages, claimed }: ClaimResult)
         height,
         marginLeft: 52,
         marginRight: 72,
-        x: { domain: [first, last], label: "passage →", ticks: across.values, tickFormat: across.format },
-        y: { domain: y, label: `↑ ${unit}${ticks.factor}`, ticks: ticks.values, tickFormat: ticks.format },
+        x: { domain: [first, last] },
+        y: { domain: y },
         marks: [
-          plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          ...axes(
+            plot,
+            { ticks: across, label: "passage →" },
+            { ticks, label: `↑ apsidal angle, ${unit}${ticks.factor}` },
+          ),
           plot.ruleY([0], { stroke: "var(--soft)" }),
           ...lines.toReversed().map(({ number, angle, ink, dash }) =>
             plot.line(number, {

@@ -1,7 +1,7 @@
 import type { ClaimResult, Ladder } from "../../../result/result.js";
 import { figure, size as inWords } from "../../../result/words.js";
 import { typeset } from "../typeset.js";
-import { linearTicks, rungTicks } from "./axes.js";
+import { axes, linearTicks, rungTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 import { spread } from "./labels.js";
 
@@ -53,21 +53,14 @@ export function stepsPlot(canvas: Canvas, { ladders, claimed, best }: ClaimResul
         height,
         marginLeft: 52,
         marginRight: 82,
-        x: {
-          type: "log",
-          domain: x,
-          label: "steps an orbit →",
-          ticks: across.values,
-          tickFormat: across.format,
-        },
-        y: {
-          domain: y,
-          label: `↑ ${claimed.unit}${ticks.factor}`,
-          ticks: ticks.values,
-          tickFormat: ticks.format,
-        },
+        x: { type: "log", domain: x },
+        y: { domain: y },
         marks: [
-          plot.gridY(ticks.values, { stroke: "var(--rule)", strokeOpacity: 1 }),
+          ...axes(
+            plot,
+            { ticks: across, label: "steps an orbit →" },
+            { ticks, label: `↑ ${claimed.unit}${ticks.factor}` },
+          ),
           ...(y[0] <= 0 && y[1] >= 0 ? [plot.ruleY([0], { stroke: "var(--soft)" })] : []),
           ...(authors === null ? [] : [plot.ruleX([authors], { stroke: "var(--own)", strokeOpacity: 0.55 })]),
           ...(best.value === null
