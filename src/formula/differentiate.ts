@@ -1,4 +1,5 @@
 import type { FunctionName, Graph, Node } from "./graph.js";
+import { inOrder } from "./walk.js";
 
 /**
  * Derivative of an expression with respect to a symbol, by the rules of the calculus; shared subexpressions
@@ -6,14 +7,7 @@ import type { FunctionName, Graph, Node } from "./graph.js";
  */
 export function differentiate(graph: Graph, node: Node, symbol: string): Node {
   const known = new Map<Node, Node>();
-  const of = (n: Node): Node => {
-    let result = known.get(n);
-    if (result === undefined) {
-      result = rule(n);
-      known.set(n, result);
-    }
-    return result;
-  };
+  const of = (n: Node): Node => known.get(n)!;
   const rule = (n: Node): Node => {
     const [a, b] = n.args as [Node, Node];
     switch (n.op) {
@@ -45,6 +39,7 @@ export function differentiate(graph: Graph, node: Node, symbol: string): Node {
     const growth = graph.multiply(of(exponent), graph.call("log", base));
     return graph.multiply(n, graph.add(growth, graph.divide(graph.multiply(exponent, of(base)), base)));
   };
+  for (const n of inOrder(node)) known.set(n, rule(n));
   return of(node);
 }
 

@@ -1,5 +1,6 @@
 import Fraction from "fraction.js";
 import { exactDecimal } from "./decimal.js";
+import { bits } from "./nearest-double.js";
 
 /** Functions that a formula may call. Each can be differentiated. */
 export const functionNames = [
@@ -15,6 +16,12 @@ export const functionNames = [
   "abs",
 ] as const;
 export type FunctionName = (typeof functionNames)[number];
+
+/**
+ * Bits of the longest fraction that is kept exact, numerator and denominator together: room for the largest
+ * and smallest doubles. Longer results stay operations, so that a short text cannot ask for endless digits.
+ */
+const LONGEST_FRACTION = 1200;
 
 /** A node of an expression graph. Equal expressions of one graph are one node. */
 export interface Node {
@@ -71,6 +78,13 @@ export class Graph {
     return this.#nodes.size;
   }
 
+  /** The exact result of an operation on two numbers, unless it is too long. */
+  #folded(a: Node, b: Node, operation: (x: Fraction, y: Fraction) => Fraction): Node | null {
+    if (a.value === null || b.value === null) return null;
+    const result = operation(a.value, b.value);
+    return bits(result.n) + bits(result.d) > LONGEST_FRACTION ? null : this.number(result);
+  }
+
   /** @param value a whole number, a decimal as text such as "0.1" or "1e-3" */
   number(value: number | string | Fraction): Node {
     return this.#intern("number", [], typeof value === "string" ? exactDecimal(value) : new Fraction(value));
@@ -81,7 +95,8 @@ export class Graph {
   }
 
   add(a: Node, b: Node): Node {
-    if (a.value && b.value) return this.number(a.value.add(b.value));
+    const exact = this.#folded(a, b, (x, y) => x.add(y));
+    if (exact !== null) return exact;
     if (a === this.zero) return b;
     if (b === this.zero) return a;
     if (b.op === "negate") return this.subtract(a, b.args[0]!);
@@ -89,7 +104,8 @@ export class Graph {
   }
 
   subtract(a: Node, b: Node): Node {
-    if (a.value && b.value) return this.number(a.value.sub(b.value));
+    const exact = this.#folded(a, b, (x, y) => x.sub(y));
+    if (exact !== null) return exact;
     if (b === this.zero) return a;
     if (a === this.zero) return this.negate(b);
     if (a === b) return this.zero;
@@ -98,7 +114,8 @@ export class Graph {
   }
 
   multiply(a: Node, b: Node): Node {
-    if (a.value && b.value) return this.number(a.value.mul(b.value));
+    const exact = this.#folded(a, b, (x, y) => x.mul(y));
+    if (exact !== null) return exact;
     if (a === this.zero || b === this.zero) return this.zero;
     if (a === this.one) return b;
     if (b === this.one) return a;
@@ -108,7 +125,8 @@ export class Graph {
   }
 
   divide(a: Node, b: Node): Node {
-    if (a.value && b.value && b !== this.zero) return this.number(a.value.div(b.value));
+    const exact = b === this.zero ? null : this.#folded(a, b, (x, y) => x.div(y));
+    if (exact !== null) return exact;
     if (a === this.zero && b !== this.zero) return this.zero;
     if (b === this.one) return a;
     if (a.op === "negate") return this.negate(this.divide(a.args[0]!, b));

@@ -18,7 +18,10 @@ export class FormulaError extends Error {
 
 const LONGEST = 10_000;
 const DEEPEST = 200;
-const NUMBER = /(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d{1,3})?/y;
+const MOST_NODES = 20_000;
+const LONGEST_NUMBER = 100;
+const LONGEST_ECHO = 40;
+const NUMBER = /(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?/y;
 const NAME = /[A-Za-z_][A-Za-z0-9_]*/y;
 const SPACE = /\s*/y;
 
@@ -62,8 +65,9 @@ class Parser {
   }
 
   #fail(wanted: string, at = this.#at, found?: string): never {
-    const character = this.#text[at];
-    throw new FormulaError(at, found ?? (character === undefined ? "the end" : `'${character}'`), wanted);
+    const character = this.#text.codePointAt(at);
+    const here = character === undefined ? "the end" : quoted(String.fromCodePoint(character));
+    throw new FormulaError(at, found ?? here, wanted);
   }
 
   #match(pattern: RegExp): string | null {
@@ -125,19 +129,33 @@ class Parser {
   }
 
   #atom(): Node {
+    if (this.#graph.size > MOST_NODES) this.#fail(`at most ${MOST_NODES} operations in all`);
     if (this.#take("(")) return this.#closing();
-    const number = this.#match(NUMBER);
-    if (number !== null) return this.#graph.number(number);
     const start = this.#at;
+    const number = this.#match(NUMBER);
+    if (number !== null) return this.#number(number, start);
     const name = this.#match(NAME);
     if (name === null) return this.#fail("a number, a name or '('");
+    const isFunction = (functionNames as readonly string[]).includes(name);
     if (this.#take("(")) {
-      if (!(functionNames as readonly string[]).includes(name)) {
-        this.#fail(`a function: ${functionNames.join(", ")}`, start, `'${name}('`);
-      }
+      if (!isFunction) this.#fail(`a function: ${functionNames.join(", ")}`, start, quoted(`${name}(`));
       return this.#graph.call(name as FunctionName, this.#closing());
     }
-    return this.#meaning(name) ?? this.#fail("a name that is defined", start, `'${name}'`);
+    if (isFunction) this.#fail(`'(' after ${name}`);
+    return this.#meaning(name) ?? this.#fail("a name that is defined", start, quoted(name));
+  }
+
+  #number(text: string, start: number): Node {
+    if (!/[1-9]/.test(text.split(/e/i)[0]!)) return this.#graph.zero;
+    const size = Number(text);
+    if (text.length > LONGEST_NUMBER || size === 0 || size === Number.POSITIVE_INFINITY) {
+      this.#fail(
+        `at most ${LONGEST_NUMBER} characters and a size from 5e-324 to 1.7e308`,
+        start,
+        quoted(text),
+      );
+    }
+    return this.#graph.number(text);
   }
 
   #closing(): Node {
@@ -145,4 +163,8 @@ class Parser {
     if (!this.#take(")")) this.#fail("')'");
     return inner;
   }
+}
+
+function quoted(text: string): string {
+  return text.length > LONGEST_ECHO ? `'${text.slice(0, LONGEST_ECHO)}…'` : `'${text}'`;
 }

@@ -1,4 +1,30 @@
 import type { Graph, Node } from "./graph.js";
+import { nearestDouble } from "./nearest-double.js";
+
+/** The nodes of an expression, each once and after its arguments; `known` ones and what is below them left out. */
+export function inOrder(node: Node, known: { has(node: Node): boolean } = new Set()): Node[] {
+  // A long sum is as deep as it has terms, too deep to recurse into.
+  const order: Node[] = [];
+  const met = new Set<Node>();
+  const open: [Node, number][] = [];
+  const enter = (n: Node): void => {
+    if (met.has(n) || known.has(n)) return;
+    met.add(n);
+    open.push([n, 0]);
+  };
+  enter(node);
+  for (let top = open.at(-1); top !== undefined; top = open.at(-1)) {
+    const [n, visited] = top;
+    if (visited < n.args.length) {
+      top[1]++;
+      enter(n.args[visited]!);
+    } else {
+      order.push(n);
+      open.pop();
+    }
+  }
+  return order;
+}
 
 /** Computes a value for a node from those of its arguments, each shared node once. */
 export function fold<T>(
@@ -6,14 +32,16 @@ export function fold<T>(
   rule: (node: Node, args: readonly T[]) => T,
   known = new Map<Node, T>(),
 ): T {
-  const ready = known.get(node);
-  if (ready !== undefined) return ready;
-  const result = rule(
-    node,
-    node.args.map((argument) => fold(argument, rule, known)),
-  );
-  known.set(node, result);
-  return result;
+  for (const n of inOrder(node, known)) {
+    known.set(
+      n,
+      rule(
+        n,
+        n.args.map((argument) => known.get(argument)!),
+      ),
+    );
+  }
+  return known.get(node)!;
 }
 
 /** An expression with symbols replaced. */
@@ -34,7 +62,7 @@ export function evaluate(node: Node, lookUp: (name: string) => number): number {
     const [a, b] = args as [number, number];
     switch (n.op) {
       case "number":
-        return n.value!.valueOf();
+        return nearestDouble(n.value!);
       case "symbol":
         return lookUp(n.name!);
       case "add":

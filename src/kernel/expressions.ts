@@ -1,4 +1,5 @@
 import type { Node } from "../formula/graph.js";
+import { nearestDouble } from "../formula/nearest-double.js";
 import { fold } from "../formula/walk.js";
 import { type Code, literal } from "./code.js";
 
@@ -28,7 +29,7 @@ export function writeExpressions(
     fold<string>(
       node,
       (n, args) => {
-        if (n.op === "number") return literal(n.value!.valueOf());
+        if (n.op === "number") return literal(nearestDouble(n.value!));
         if (n.op === "symbol") return bind(n.name!);
         const name = `${prefix}${n.id}`;
         code.define(name, operation(n, args));
