@@ -16,6 +16,10 @@ export interface ParsedDocument {
 /** Claims nest four levels; anything deep is not one. */
 const DEEPEST = 32;
 
+const PLAIN_TAGS = new Set(
+  ["map", "seq", "str", "int", "float", "bool", "null"].map((name) => `tag:yaml.org,2002:${name}`),
+);
+
 /** Parses YAML (and JSON, being a subset) into plain data. Nothing in it is run, expanded or included. */
 export function parseDocument(
   text: string,
@@ -75,7 +79,7 @@ export function parseDocument(
         );
       }
       const tag = (node as { tag?: string }).tag;
-      if (tag !== undefined && !tag.startsWith("tag:yaml.org,2002:")) {
+      if (tag !== undefined && !PLAIN_TAGS.has(tag)) {
         problems.push(problem(range?.[0] ?? 0, `the tag ${echo(tag)}`, "a plain value"));
       }
     },

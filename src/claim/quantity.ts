@@ -45,10 +45,7 @@ export function parseQuantity(input: unknown, wanted: string): Quantity | Misrea
   if (number === undefined || unitText === undefined) return { found: echo(input), wanted: example };
   const unit = unitText === "" ? NO_UNIT : parseUnit(unitText);
   if ("unknown" in unit) {
-    const near = nearest(
-      unit.unknown,
-      unitsCatalog.map(({ name }) => name),
-    );
+    const near = nearest(unit.unknown, unitsOf(target));
     return {
       found: `the unit ${echo(unit.unknown)}`,
       wanted: near === null ? `a unit of ${wanted}` : `'${near}'?`,
@@ -74,4 +71,12 @@ export function parseQuantity(input: unknown, wanted: string): Quantity | Misrea
     unit: unitText,
     unitSize: nearestDouble(unit.size) * pi,
   };
+}
+
+/** Units that can stand in a quantity of the dimension of another. */
+function unitsOf({ dimension }: Unit): string[] {
+  const kinds = (["length", "time", "angle"] as const).filter((kind) => dimension[kind] !== 0);
+  return unitsCatalog
+    .filter(({ unit }) => kinds.some((kind) => unit.dimension[kind] !== 0))
+    .map(({ name }) => name);
 }
