@@ -18,6 +18,8 @@ type Domain = readonly [number, number];
 const ONE_AXIS = 30;
 /** The second axis takes in what lies within so many margins of the claim: its bar keeps some twelve pixels. */
 const NEAR = 100;
+/** A bar shorter than this share of the axis lies under its own mark: caps would only blur it. */
+const CAPS = 0.012;
 
 /** Claimed and recomputed figures on one axis, and once more from near where that hides the claim's margin. */
 export function intervalsPlot(canvas: Canvas, result: ClaimResult): string | null {
@@ -124,7 +126,7 @@ function axis(
             }),
             plot.tickX(
               [row.value - row.half, row.value + row.half].filter(
-                (end) => row.half > 0 && end >= domain[0] && end <= domain[1],
+                (end) => row.half > CAPS * (domain[1] - domain[0]) && end >= domain[0] && end <= domain[1],
               ),
               { x: (end: number) => end, y: () => row.name, stroke: row.ink, strokeWidth: 2, inset: 8 },
             ),

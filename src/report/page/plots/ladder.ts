@@ -56,8 +56,9 @@ export function ladderPlot(canvas: Canvas, result: ClaimResult): string | null {
             { ticks: logTicks(...y, isWide ? 9 : 7), label: `↑ ${what.toLowerCase()}, ${unit}` },
           ),
           ...levels(plot, scene),
-          ...lines.flatMap((line) => markLine(plot, line)),
           ...lawLine(plot, scene),
+          ...lines.flatMap((line) => markLine(plot, line)),
+          ...lawName(plot, scene),
           ...authorsStep(plot, scene),
           ...levelNames(plot, scene),
           ...methodNames(plot, scene, size),
@@ -135,17 +136,20 @@ function markLine(plot: Plot, { points, isOwn }: Line) {
   ];
 }
 
-/** The fitted law, drawn beyond its window by one rung each way, to be told from the line that it fits. */
-function lawLine(plot: Plot, { own, y }: Scene) {
+/** The fitted law, beyond its window by one rung each way, where it shows from under the line that it fits. */
+function lawOf({ own, y }: Scene): readonly Point[] {
   if (own === null) return [];
   const { coefficient, figureOrder: order, window, rungs } = own;
   if (coefficient === null || order === null || window === null) return [];
   const at = (n: number): Point => ({ n, distance: Math.abs(coefficient) * n ** -order });
-  const law = rungs
+  return rungs
     .slice(Math.max(0, window[0] - 1), window[1] + 2)
     .map(({ stepsPerOrbit }) => at(stepsPerOrbit))
     .filter(({ distance }) => isShown(distance, y));
-  const middle = law[Math.floor(law.length / 3)];
+}
+
+function lawLine(plot: Plot, scene: Scene) {
+  const law = lawOf(scene);
   return [
     plot.line(law, {
       x: law.map(({ n }) => n),
@@ -153,10 +157,15 @@ function lawLine(plot: Plot, { own, y }: Scene) {
       stroke: "var(--ink)",
       strokeDasharray: "5 4",
     }),
-    middle === undefined
-      ? null
-      : note(plot, `order ${order.toFixed(2)}`, { x: middle.n, y: middle.distance, side: "right", dx: 8 }),
   ];
+}
+
+function lawName(plot: Plot, scene: Scene) {
+  const law = lawOf(scene);
+  const place = law[Math.floor(law.length / 3)];
+  if (place === undefined) return [];
+  const text = `order ${scene.own!.figureOrder!.toFixed(2)}`;
+  return [note(plot, text, { x: place.n, y: place.distance, side: "right", dx: 8 })];
 }
 
 function authorsStep(plot: Plot, { lines, authors, x, y }: Scene) {
