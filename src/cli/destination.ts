@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import { rmSync } from "node:fs";
-import { realpath, stat, writeFile } from "node:fs/promises";
+import { mkdir, realpath, stat, writeFile } from "node:fs/promises";
 import { dirname, join } from "node:path";
 import { WriteError, writeWhole } from "../report/write.js";
 import { CallError } from "./call-error.js";
@@ -12,32 +12,52 @@ import { CallError } from "./call-error.js";
  * @throws CallError
  */
 export async function writeTo(path: string, text: string): Promise<void> {
-  const target = await realpath(path).catch(() => path);
   const about = await stat(path).catch(() => null);
-  if (about === null || about.isFile()) return asCallError(path, writeWhole(target, text));
-  await writeFile(path, text).catch((error: NodeJS.ErrnoException) => {
-    throw new CallError(`cannot write ${path}: ${error.code === "ENOSPC" ? "no space is left" : error.code}`);
-  });
+  if (about !== null && !about.isFile()) return explained(path, writeFile(path, text));
+  await explained(path, writeWhole(await realpath(path).catch(() => path), text));
 }
 
 /** Finds out ahead of the work whether a file can be written; leaves nothing. @throws CallError */
 export async function tryWriting(path: string): Promise<void> {
   const about = await stat(path).catch(() => null);
-  if (about?.isDirectory()) {
-    throw new CallError(`cannot write ${path}: a folder of that name is in the way`);
-  }
+  if (about?.isDirectory()) throw new CallError(`cannot write ${path}: it is a folder`);
   if (about !== null && !about.isFile()) return;
   const target = await realpath(path).catch(() => path);
   const trial = join(dirname(target), `.cupel-${randomUUID()}`);
-  await asCallError(path, writeWhole(trial, ""), trial);
+  await explained(path, writeWhole(trial, ""), trial);
   rmSync(trial, { force: true });
 }
 
-/** An error in writing is told of the path that was asked for. */
-export async function asCallError<T>(path: string, work: Promise<T>, written = path): Promise<T> {
+/**
+ * Makes a folder and those above it that are missing, outermost first. (Node's own recursive way never returns where a file system refuses folders
+ * as if their parent were missing, as /proc does.)
+ *
+ * @throws CallError
+ */
+export async function makeFolders(path: string, missing: readonly string[]): Promise<void> {
+  for (const folder of missing) await explained(path, mkdir(folder));
+  if (!(await stat(path)).isDirectory())
+    throw new CallError(`cannot write ${path}: it is a file, not a folder`);
+}
+
+const REASONS: Readonly<Record<string, string>> = {
+  EACCES: "no permission",
+  EPERM: "no permission",
+  EROFS: "the file system is read-only",
+  ENOSPC: "no space is left",
+  ENOTDIR: "part of the path is a file, not a folder",
+  ENOENT: "no folder can be made there",
+  ENAMETOOLONG: "the name is too long",
+};
+
+/** An error in writing, told of the path that was asked for. */
+async function explained<T>(path: string, work: Promise<T>, written = path): Promise<T> {
   try {
     return await work;
   } catch (error) {
-    throw error instanceof WriteError ? new CallError(error.message.replace(written, () => path)) : error;
+    if (error instanceof WriteError) throw new CallError(error.message.replace(written, () => path));
+    const { code } = error as NodeJS.ErrnoException;
+    if (code === undefined) throw error;
+    throw new CallError(`cannot write ${path}: ${REASONS[code] ?? code}`);
   }
 }

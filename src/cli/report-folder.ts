@@ -1,8 +1,8 @@
 import { existsSync, rmdirSync } from "node:fs";
 import { dirname, join, resolve } from "node:path";
-import { makeFolder, pageNames } from "../report/write.js";
+import { pageNames } from "../report/write.js";
 import type { ClaimResult } from "../result/result.js";
-import { asCallError, tryWriting, writeTo } from "./destination.js";
+import { makeFolders, tryWriting, writeTo } from "./destination.js";
 
 /** The folder of the pages: a page a claim, and an index of several. */
 export class ReportFolder {
@@ -26,9 +26,9 @@ export class ReportFolder {
    */
   static async open(path: string, files: readonly string[]): Promise<ReportFolder> {
     const made = missing(path);
-    await asCallError(path, makeFolder(path));
     const folder = new ReportFolder(path, made, files);
     try {
+      await makeFolders(path, made.toReversed());
       await tryWriting(join(path, "index.html"));
     } catch (error) {
       folder.leave();
