@@ -1,92 +1,206 @@
-import type { ClaimResult, Ladder, LedgerEntry } from "../../result/result.js";
-import { size } from "../../result/words.js";
+import type {
+  CheckName,
+  ClaimResult,
+  Ladder,
+  LedgerEntry,
+  Outcome,
+  PassageSeries,
+} from "../../result/result.js";
+import { plural, size } from "../../result/words.js";
+import { isZoomed } from "./plots/intervals.js";
+import { stepsView } from "./plots/steps-view.js";
 import { BUDGET_WORDS } from "./words.js";
 
 /** Captions say what to look for in this case: each is written from its figures. */
 
-export function intervalsCaption({ claimed, asSolved, best }: ClaimResult): string {
+const sentences = (...parts: readonly string[]): string => parts.filter((part) => part !== "").join(" ");
+
+const outcomeOf = ({ checks }: ClaimResult, name: CheckName): Outcome | undefined =>
+  checks.find((check) => check.name === name)?.outcome;
+
+export function intervalsCaption(result: ClaimResult): string {
+  const { claimed, best } = result;
   if (claimed === null) return "";
-  const { unit } = claimed;
-  if (best.value === null) return `The claim stands alone: nothing bounds the figure in ${unit}.`;
-  const off = claimed.value - best.value;
-  const margins = Math.abs(off) / claimed.halfWidth;
+  if (best.value === null)
+    return "No method bounds the figure, so the claimed interval has nothing to be held against.";
+  const off = Math.abs(claimed.value - best.value);
   const place =
-    margins <= 1
-      ? `The best value lies inside the claimed interval, ${size(Math.abs(off))} ${unit} from its middle`
-      : `The best value lies ${size(margins)} margins outside the claimed value`;
-  if (asSolved.value === null) return `${place}. The stated solution gives no figure to set beside them.`;
-  const error = Math.abs(asSolved.error ?? 0);
-  const solved =
-    error <= claimed.halfWidth / 3
-      ? `the stated solution lands within ${size(error)} of it`
-      : `the stated solution lands ${size(error)} away from it`;
-  return `${place}; ${solved}.`;
+    off <= claimed.halfWidth
+      ? `The best value lies inside the claimed interval, ${off < claimed.halfWidth / 100 ? "in its very middle" : `${size((100 * off) / claimed.halfWidth)} % of the margin from its middle`}.`
+      : `The best value lies outside the claimed interval: ${size(off)} ${claimed.unit} from its middle, ${size(off / claimed.halfWidth)} times the margin.`;
+  return sentences(
+    place,
+    solvedBeside(result),
+    isZoomed(result) ? "The second axis shows the claim from near." : "",
+  );
+}
+
+/** Where the recomputed solution falls, between the claim and the best value. */
+function solvedBeside(result: ClaimResult): string {
+  const { claimed, asSolved, best } = result;
+  if (asSolved.value === null) return "There is no recomputed solution to set beside them.";
+  const onClaim = outcomeOf(result, "reproduces") === "pass";
+  const onBest = outcomeOf(result, "carries-digits") === "pass";
+  if (onClaim && onBest) return "The stated solution, solved again, falls on both.";
+  const fromBest = `${size(Math.abs(asSolved.value - best.value!))} ${claimed!.unit}`;
+  const fromClaim = `${size(Math.abs(asSolved.value - claimed!.value))} ${claimed!.unit}`;
+  if (onClaim) {
+    return `The stated solution, solved again, falls on the claim and ${fromBest} from the best value: what was quoted is what this step gives.`;
+  }
+  if (onBest) {
+    return `The stated solution, solved again, falls on the best value and ${fromClaim} from the claim: what was quoted is not what it gives.`;
+  }
+  return `The stated solution, solved again, falls on neither: ${fromClaim} from the claim, ${fromBest} from the best value.`;
 }
 
 export function ladderCaption({ ladders, claimed, best }: ClaimResult): string {
+  if (claimed === null) return "";
   const own = ladders.find(({ role }) => role === "solution");
-  if (own === undefined)
-    return `${ladders.length} methods and no solution of the author's: look for where the lines end together.`;
+  if (own === undefined) return witnessesAlone(ladders, claimed.halfWidth / 3, best.value);
   const rung = own.rungs.find(({ isAuthors }) => isAuthors);
-  const at =
-    rung === undefined ? "" : ringed(own, rung.stepsPerOrbit, rung.figure, best.value, claimed?.unit ?? "");
-  return `${own.says}${at}`;
+  return sentences(
+    own.says,
+    rung === undefined ? "" : authorsRung(own, rung, best.value, claimed.unit),
+    crossing(own, claimed.halfWidth / 3),
+    isScattered(own, best.value) ? "The dashed law bounds differences that scatter below it." : "",
+  );
 }
 
-function ringed(own: Ladder, n: number, value: number | null, best: number | null, unit: string): string {
-  if (value === null || best === null)
-    return ` At the author's ${Math.round(n)} steps an orbit there is no figure to ring.`;
+function authorsRung(own: Ladder, rung: Ladder["rungs"][number], best: number | null, unit: string): string {
+  const at = `The author's ${Math.round(rung.stepsPerOrbit)} steps an orbit`;
+  if (rung.figure === null) return `${at} give no figure.`;
+  const k = own.rungs.indexOf(rung);
   const { window } = own;
-  const rung = own.rungs.findIndex(({ isAuthors }) => isAuthors);
   const where =
     window === null
       ? "with no window to lie in"
-      : rung >= window[0] && rung <= window[1]
+      : k >= window[0] && k <= window[1]
         ? "inside the shaded window"
         : "outside the shaded window";
-  return ` The author's ${Math.round(n)} steps an orbit, ringed, lie ${where}, ${size(Math.abs(value - best))} ${unit} from the best value.`;
+  const apart = best === null ? "" : `, ${size(Math.abs(rung.figure - best))} ${unit} from the best value`;
+  return `${at}, ringed, lie ${where}${apart}.`;
 }
 
-export function stepsCaption({ asSolved, claimed, best, setup }: ClaimResult): string {
-  if (asSolved.null === null || claimed === null) return "The null run gives no figure at the author's step.";
+/** Which witness first comes under a level for good. */
+function witnessesAlone(ladders: readonly Ladder[], third: number, best: number | null): string {
+  const without = "The claim names no solution, so there are only witnesses.";
+  if (best === null) return without;
+  const first = ladders
+    .flatMap(({ method, rungs }) => {
+      const over = rungs.findLastIndex(({ figure }) => figure === null || Math.abs(figure - best) > third);
+      const under = rungs[over + 1];
+      return under === undefined ? [] : [{ method, n: under.stepsPerOrbit }];
+    })
+    .sort((a, b) => a.n - b.n)[0];
+  return first === undefined
+    ? `${without} None of them comes under a third of the margin for good.`
+    : `${without} The first to come under a third of the margin for good is ${first.method}, at ${Math.round(first.n)} steps an orbit.`;
+}
+
+/** Where the fitted law comes down to a level. */
+function crossing({ coefficient, figureOrder, method, rungs }: Ladder, third: number): string {
+  if (coefficient === null || figureOrder === null || figureOrder <= 0) return "";
+  const n = (Math.abs(coefficient) / third) ** (1 / figureOrder);
+  if (n < rungs[0]!.stepsPerOrbit) return "";
+  const beyond = n > rungs.at(-1)!.stepsPerOrbit ? ", beyond the finest rung" : "";
+  return `The law of ${method} comes down to a third of the margin at about ${Number(n.toPrecision(2))} steps an orbit${beyond}.`;
+}
+
+/** Whether the law is a bound rather than the line through the rungs: some in the window are a third of it. */
+function isScattered(
+  { coefficient, figureOrder, window, rungs, floor }: Ladder,
+  best: number | null,
+): boolean {
+  if (coefficient === null || figureOrder === null || window === null || best === null) return false;
+  return rungs.slice(window[0], window[1] + 1).some(({ figure, stepsPerOrbit }) => {
+    const law = Math.abs(coefficient) * stepsPerOrbit ** -figureOrder;
+    return figure !== null && law > 3 * (floor ?? 0) && Math.abs(figure - best) < law / 3;
+  });
+}
+
+export function stepsCaption(result: ClaimResult): string {
+  const { asSolved, claimed, ladders, best } = result;
+  const view = stepsView(result);
+  if (claimed === null || view === null) return "";
   const { unit, halfWidth } = claimed;
-  if (setup?.nullRun.startsWith("nothing") === true) {
-    return `Nothing can be switched off here: all of the ${size(asSolved.null)} ${unit} at the author's step is the integrator's.`;
+  const leaves =
+    view.leavesBelow === null
+      ? ""
+      : `Below ${Math.round(view.leavesBelow)} steps an orbit the curves leave the frame.`;
+  const off = asSolved.null;
+  if (off === null) return sentences("The null run gives no figure at the author's step.", leaves);
+  const rung = ladders.find(({ role }) => role === "solution")?.rungs.find(({ isAuthors }) => isAuthors);
+  const shown = `${size(off)} ${unit}`;
+  const isSmall = Math.abs(off) <= halfWidth / 10;
+  if (rung?.value === off) {
+    return sentences(
+      isSmall
+        ? `Nothing can be switched off here; the run itself shows ${shown} at the author's step, less than a tenth of the margin.`
+        : `Nothing can be switched off here: all of the ${shown} at the author's step is the integrator's.`,
+      leaves,
+    );
   }
-  const shown = Math.abs(asSolved.null);
   if (claimed.baseline === "subtracted") {
-    return `The null run shows ${size(asSolved.null)} ${unit} at the author's step; the claim takes it off, and the distance between the two curves is the figure.`;
+    const raw = rung?.value == null ? "" : `the run shows ${size(rung.value)} and `;
+    return sentences(
+      `At the author's step ${raw}the null run ${shown}; the claim is about their difference, which holds still while both turn away.`,
+      leaves,
+    );
   }
-  if (shown <= halfWidth / 10)
-    return `The null run stays at ${size(asSolved.null)} ${unit} at the author's step: next to nothing, as it should.`;
-  const share = best.value === null ? "" : `, ${size((100 * shown) / Math.abs(best.value))} % of the effect`;
-  return `With the effect off the author's step still turns the apsis by ${size(asSolved.null)} ${unit}${share}: what lifts the run's curve off the dashed best value.`;
+  if (isSmall) {
+    return sentences(
+      `At the author's step the null run shows ${shown}, less than a tenth of the margin: the figure is the effect's.`,
+      leaves,
+    );
+  }
+  const share = best.value ? ` and ${size(100 * Math.abs(off / best.value))} % of the effect` : "";
+  const error = asSolved.error === null ? "" : ` The figure itself is off by ${size(asSolved.error)}.`;
+  return sentences(
+    `With the effect off, the author's step still turns the apsis by ${shown}: ${size(Math.abs(off) / halfWidth)} times the margin${share}.${error}`,
+    leaves,
+  );
 }
 
 export function passagesCaption({ passages, claimed }: ClaimResult): string {
   if (passages === null || claimed === null) return "";
   const unit = claimed.unit.split("/")[0] ?? "";
-  const last = passages.solution.angle.at(-1) ?? 0;
-  const count = passages.solution.number.length;
-  const base = passages.null?.angle.at(-1);
-  const beside = base === undefined ? "" : `, the null run by ${size(base)}`;
-  return `Over ${count} passages the apsis turns by ${size(last)} ${unit}${beside}; the slope of the line is the figure, and a bend in it would be a drift of the numerics.`;
+  const { solution } = passages;
+  if (solution.number.length < 2) return "";
+  const turned = (series: PassageSeries): number => series.angle.at(-1)! - series.angle[0]!;
+  const beside = passages.null === null ? "" : `, in the null run by ${size(turned(passages.null))}`;
+  return sentences(
+    `Over ${plural(solution.number.length, "passage")} the apsis turns by ${size(turned(solution))} ${unit}${beside}.`,
+    `The slope is the figure; no passage is more than ${size(bend(solution))} ${unit} off the straight line from first to last.`,
+  );
+}
+
+/** Largest departure from the chord. */
+function bend({ number, angle }: PassageSeries): number {
+  const slope = (angle.at(-1)! - angle[0]!) / (number.at(-1)! - number[0]!);
+  return Math.max(
+    ...angle.map((value, i) => Math.abs(value - angle[0]! - slope * (number[i]! - number[0]!))),
+  );
 }
 
 export function ledgerCaption({ says, largest, perOrbit, pattern, stepOrder }: LedgerEntry): string {
-  const drifting =
+  const isDrifting =
     pattern === "linear-drift" || pattern === "faster-growth" || pattern === "jumps-at-periapsis";
-  const rate = drifting ? ` It comes to ${size(perOrbit)} an orbit.` : "";
-  const order = stepOrder === null ? "" : ` Half the step leaves 1/${size(2 ** stepOrder)} of it.`;
-  return `${says} Largest relative change ${size(largest)}.${rate}${order}`;
+  return sentences(
+    says,
+    `Largest relative change ${size(largest)}${isDrifting ? `, ${size(perOrbit)} an orbit` : ""}.`,
+    stepOrder === null ? "" : `It goes as the step to the power of ${stepOrder.toFixed(2)}.`,
+  );
 }
 
 export function budgetCaption({ budget, claimed }: ClaimResult): string {
   if (budget === null || claimed === null || budget.dominant === null || budget.total === null) return "";
-  const third = claimed.halfWidth / 3;
   const dominant = BUDGET_WORDS[budget.dominant];
-  const ratio = budget.total / third;
+  const ratio = budget.total / (claimed.halfWidth / 3);
+  const total = `${size(budget.total)} ${claimed.unit} in quadrature`;
+  if (ratio < 0.01) {
+    return `Together ${total}, less than a hundredth of what a third of the margin allows; most of it is ${dominant}.`;
+  }
   return ratio <= 1
-    ? `The total, ${size(budget.total)} ${claimed.unit}, is ${size(ratio)} of what a third of the margin allows; most of it is ${dominant}.`
-    : `The total, ${size(budget.total)} ${claimed.unit}, is ${size(ratio)} times what a third of the margin allows; ${dominant} is what would have to shrink.`;
+    ? `Together ${total}, ${size(100 * ratio)} % of what a third of the margin allows; most of it is ${dominant}.`
+    : `Together ${total}, ${size(ratio)} times what a third of the margin allows; ${dominant} is the part that has to shrink.`;
 }

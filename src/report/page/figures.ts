@@ -11,7 +11,14 @@ export interface FigureRow {
   readonly note: string;
 }
 
-export const NONE = "none";
+const NONE = "none";
+const NO_SOLUTION = "the claim gives no solution";
+
+/** With the noughts at its end, where it is written without an exponent. */
+function asWritten({ text, value }: NonNullable<ClaimResult["claimed"]>): string {
+  const written = /^[-+\u2212]?[\d.]+(?=[\s(±+°]|$)/u.exec(text.trim())?.[0];
+  return written !== undefined && Number(written.replace("\u2212", "-")) === value ? written : String(value);
+}
 
 /** The claimed and recomputed figures, all in the claim's unit. */
 export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): readonly FigureRow[] {
@@ -30,7 +37,7 @@ export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): rea
   return [
     {
       name: "claimed",
-      value: typeset(String(claimed.value)),
+      value: typeset(asWritten(claimed)),
       // As the author gave it, without digits of ours.
       margin: `± ${typeset(String(Number(claimed.halfWidth.toPrecision(3))))}`,
       note: subtracted ? "a null run taken off, as the claim says" : "as it came out, no null run taken off",
@@ -41,9 +48,14 @@ export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): rea
       null,
       setup?.method
         ? `${setup.method.name} at the author's step${subtracted ? ", less its null run" : ""}`
-        : "the claim gives no solution",
+        : NO_SOLUTION,
     ),
-    row("null run", number(asSolved.null), null, "the same method and step, the effect switched off"),
+    row(
+      "null run",
+      number(asSolved.null),
+      null,
+      setup?.method ? "the same method and step, the effect switched off" : NO_SOLUTION,
+    ),
     row(
       "best value",
       best.value === null
@@ -56,7 +68,7 @@ export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): rea
       "numerical error",
       asSolved.error === null ? NONE : typeset(size(asSolved.error)),
       asSolved.halfWidth,
-      "as solved less the best value",
+      setup?.method ? "as solved less the best value" : NO_SOLUTION,
     ),
   ];
 }

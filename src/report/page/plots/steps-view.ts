@@ -31,23 +31,20 @@ export function stepsView({ ladders, claimed, best }: ClaimResult): StepsView | 
   if ((series[0]?.points.length ?? 0) < 2) return null;
   const y = frame(own, series, best.value);
   const ok = own.rungs.filter(({ value }) => value !== null).map(({ stepsPerOrbit }) => stepsPerOrbit);
-  const inside = series.flatMap(({ points }) =>
-    points.filter(({ value }) => value >= y[0] && value <= y[1]).map(({ n }) => n),
-  );
-  const coarsest = Math.min(...inside);
-  // One rung more, to show where the curves come from.
-  const from = Math.max(0, ok.indexOf(coarsest) - 1);
-  const steps = ok.slice(from);
-  const isLeaving = series.some(({ points }) =>
-    points.some(({ n, value }) => n <= coarsest && (value < y[0] || value > y[1])),
-  );
+  const isOutside = (n: number): boolean =>
+    series.some(({ points }) =>
+      points.some((point) => point.n === n && (point.value < y[0] || point.value > y[1])),
+    );
+  const lastOutside = ok.findLastIndex(isOutside);
+  // The last rung outside is kept, to show where the curves come from.
+  const steps = ok.slice(Math.max(0, lastOutside));
   return {
     series,
     authors: own.rungs.find(({ isAuthors }) => isAuthors)?.stepsPerOrbit ?? null,
     steps,
     x: [Math.min(...steps) / 1.1, Math.max(...steps) * 1.1],
     y,
-    leavesBelow: isLeaving ? coarsest : null,
+    leavesBelow: lastOutside < 0 ? null : (steps[1] ?? null),
   };
 }
 
@@ -69,7 +66,8 @@ function seriesOf({ rungs }: Ladder, isSubtracted: boolean): readonly Series[] {
     ink: "var(--null)",
     dash: "5 3",
     symbol: "triangle",
-    points: points("null"),
+    // Where nothing can be switched off the null run is the run itself, and one curve is enough.
+    points: rungs.every((rung) => rung.null === rung.value) ? [] : points("null"),
   };
   const difference: Series = {
     label: "difference",

@@ -22,6 +22,8 @@ export function stepsPlot(canvas: Canvas, result: ClaimResult): string | null {
       const isWide = size === "wide";
       const height = isWide ? 320 : 280;
       const ticks = linearTicks(...y, 6);
+      // The label goes where the finer rungs' curves do not run.
+      const isHigh = series.every(({ points }) => points.at(-1)!.value > (y[0] + y[1]) / 2);
       const at = (share: number): number => y[0] + share * (y[1] - y[0]);
       const places = spread(
         series.map(({ points }) => Math.min(1, Math.max(0, (points.at(-1)!.value - y[0]) / (y[1] - y[0])))),
@@ -46,7 +48,13 @@ export function stepsPlot(canvas: Canvas, result: ClaimResult): string | null {
           best === null ? null : note(plot, "best value", { x: x[0], y: best, side: "right" }),
           authors === null
             ? null
-            : note(plot, "author's step", { x: authors, y: y[1], side: "right", dy: 8, ink: "var(--own)" }),
+            : note(plot, "author's step", {
+                x: authors,
+                y: isHigh ? y[0] : y[1],
+                side: "right",
+                dy: isHigh ? -8 : 8,
+                ink: "var(--own)",
+              }),
           ...series.map(({ label, ink }, k) =>
             note(plot, label, { x: x[1], y: at(places[k]!), side: "right", dx: 6, dy: 0, ink, isBold: true }),
           ),
