@@ -20,7 +20,6 @@ export async function carryOut(listed: (typeof commands)[number], args: readonly
     .parserConfiguration({
       "boolean-negation": false,
       "camel-case-expansion": false,
-      "duplicate-arguments-array": false,
       "parse-numbers": false,
       "parse-positional-numbers": false,
     })
@@ -32,6 +31,11 @@ export async function carryOut(listed: (typeof commands)[number], args: readonly
     .help(false)
     .option("help", { type: "boolean", describe: "Show this text" })
     .wrap(WIDTH)
+    .check((given) => {
+      const twice = Object.keys(options).find((option) => Array.isArray(given[option]));
+      if (twice !== undefined) throw new CallError(`--${twice}: found it twice; wanted it once`);
+      return true;
+    })
     .fail((message, error) => {
       // Its own errors come both ways: as a message, and as an error of its own class.
       if (error && error.name !== "YError") throw error;
