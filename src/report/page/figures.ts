@@ -24,7 +24,11 @@ function asWritten({ text, value }: NonNullable<ClaimResult["claimed"]>): string
 export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): readonly FigureRow[] {
   if (claimed === null) return [];
   const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
-  const number = (value: number | null): string => (value === null ? NONE : typeset(figure(value, fine)));
+  const number = (value: number | null): string => {
+    if (value === null) return NONE;
+    // What is below every digit of interest still is not nothing.
+    return typeset(Math.abs(value) <= fine ? size(value) : figure(value, fine));
+  };
   const margin = (halfWidth: number | null): string =>
     halfWidth === null ? "" : `± ${typeset(size(halfWidth))}`;
   const subtracted = claimed.baseline === "subtracted";

@@ -1,10 +1,9 @@
 import type { ClaimResult } from "../../result/result.js";
 import { size } from "../../result/words.js";
-import { digitsInWords } from "../terminal.js";
 import { clean } from "../text.js";
 import { figureRows } from "./figures.js";
 import { plotsOf } from "./plot-sections.js";
-import { quotedDigits } from "./quoted-digits.js";
+import { quoteOf } from "./quote.js";
 import { rungTables, stepsPerOrbit } from "./rung-tables.js";
 import { setupRows, sourceRows } from "./setup-rows.js";
 import { template } from "./templates.js";
@@ -26,7 +25,8 @@ export async function renderPage(result: ClaimResult): Promise<string> {
     reason: setup === null ? clean(result.reason) : typeset(clean(result.reason)),
     grade: grade ?? "",
     gradeRule: typeset(gradeRule),
-    quote: claimed && quoteOf(result, claimed),
+    quote: quoteOf(result),
+    quoted: claimed === null ? "" : quantityOf(claimed),
     unit: clean(claimed?.unit ?? ""),
     figures: figureRows(result),
     plots,
@@ -46,14 +46,8 @@ export async function renderPage(result: ClaimResult): Promise<string> {
   });
 }
 
-function quoteOf(result: ClaimResult, claimed: NonNullable<ClaimResult["claimed"]>): object {
-  const says = digitsInWords(result);
-  return {
-    ...quotedDigits(clean(claimed.text), says === "" ? null : Math.min(result.digits ?? 0, claimed.digits)),
-    says,
-    what: `${spaced(claimed.quantity)} as claimed${claimed.baseline === "subtracted" ? ", a null run taken off" : ""}`,
-  };
-}
+const quantityOf = ({ quantity, baseline }: NonNullable<ClaimResult["claimed"]>): string =>
+  `${spaced(quantity)} as claimed${baseline === "subtracted" ? ", a null run taken off" : ""}`;
 
 function checkRows({ checks }: ClaimResult): object[] {
   const small = (value: number | null): string => (value === null ? "" : typeset(size(value)));
@@ -62,7 +56,7 @@ function checkRows({ checks }: ClaimResult): object[] {
     outcome,
     outcomeWord: OUTCOME_TITLES[outcome],
     figure: small(figure),
-    limit: small(limit),
+    limit: limit === null ? "" : `limit ${small(limit)}`,
     unit: figure === null && limit === null ? "" : clean(unit),
     says: typeset(clean(says)),
   }));
@@ -80,7 +74,7 @@ function remedyOf({ remedy, setup }: ClaimResult): object | null {
       method,
       isAuthors: method === setup?.method?.name,
       step: clean(step),
-      steps: stepsPerOrbit(count),
+      steps: /orbit/.test(step) ? "" : `${stepsPerOrbit(count)} steps an orbit`,
       cost: typeset(size(relativeCost)),
       basis: basis === "measured" ? "measured on a rung" : "extended along the fitted law",
     })),

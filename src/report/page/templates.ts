@@ -7,7 +7,7 @@ const folder = new URL("../../../templates/", import.meta.url);
 const compiled = new Map<string, Promise<Template>>();
 const handlebars = Handlebars.create();
 
-const PARTIALS = ["style", "plot", "notice"];
+const PARTIALS = ["style", "plot", "quote", "notice"];
 let partials: Promise<void> | undefined;
 
 /** A page's template, compiled once. Everything in it is escaped but SVG of our own. */

@@ -34,6 +34,7 @@ export function budgetPlot(canvas: Canvas, { budget, claimed }: ClaimResult): st
         y: { domain: parts.map(({ name }) => name), label: null, tickSize: 0 },
         marks: [
           ...axes(plot, { ticks, label: `${claimed.unit} →` }, null),
+          plot.ruleX([third], { stroke: "var(--ink)", strokeDasharray: "6 3" }),
           ...parts.flatMap(({ name, amount, isDominant }) => [
             plot.barX([name], {
               y: [name],
@@ -54,7 +55,6 @@ export function budgetPlot(canvas: Canvas, { budget, claimed }: ClaimResult): st
               fontWeight: isDominant ? "bold" : "normal",
             }),
           ]),
-          plot.ruleX([third], { stroke: "var(--ink)", strokeDasharray: "6 3" }),
           plot.text([third], {
             x: third,
             frameAnchor: "top",

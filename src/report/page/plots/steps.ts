@@ -22,8 +22,6 @@ export function stepsPlot(canvas: Canvas, result: ClaimResult): string | null {
       const isWide = size === "wide";
       const height = isWide ? 320 : 280;
       const ticks = linearTicks(...y, 6);
-      // The label goes where the finer rungs' curves do not run.
-      const isHigh = series.every(({ points }) => points.at(-1)!.value > (y[0] + y[1]) / 2);
       const at = (share: number): number => y[0] + share * (y[1] - y[0]);
       const places = spread(
         series.map(({ points }) => Math.min(1, Math.max(0, (points.at(-1)!.value - y[0]) / (y[1] - y[0])))),
@@ -50,9 +48,9 @@ export function stepsPlot(canvas: Canvas, result: ClaimResult): string | null {
             ? null
             : note(plot, "author's step", {
                 x: authors,
-                y: isHigh ? y[0] : y[1],
+                y: at(freeShare(view, best)),
                 side: "right",
-                dy: isHigh ? -8 : 8,
+                dy: 0,
                 ink: "var(--own)",
               }),
           ...series.map(({ label, ink }, k) =>
@@ -62,6 +60,21 @@ export function stepsPlot(canvas: Canvas, result: ClaimResult): string | null {
       };
     },
   });
+}
+
+/** The height for a label at the author's step that is farthest from what is drawn there. */
+function freeShare({ series, authors, y }: StepsView, best: number | null): number {
+  const share = (value: number): number => (value - y[0]) / (y[1] - y[0]);
+  const drawn = [
+    share(0),
+    ...(best === null ? [] : [share(best)]),
+    ...series.flatMap(({ points }) => {
+      const k = points.findIndex(({ n }) => n === authors);
+      return points.slice(Math.max(0, k), k + 2).map(({ value }) => share(value));
+    }),
+  ];
+  const room = (place: number): number => Math.min(...drawn.map((one) => Math.abs(one - place)));
+  return [0.95, 0.75, 0.5, 0.25, 0.05].reduce((one, other) => (room(other) > room(one) ? other : one));
 }
 
 function curve(plot: Plot, { points, ink, dash, symbol }: Series, { x, y }: StepsView) {
