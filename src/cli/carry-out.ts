@@ -1,6 +1,6 @@
 import { availableParallelism } from "node:os";
 import { formatProblem } from "../claim/problem.js";
-import { type ReadOutcome, readClaim } from "../claim/read.js";
+import type { ReadOutcome } from "../claim/read.js";
 import { toJson } from "../report/json.js";
 import { removeUnfinished } from "../report/write.js";
 import type { ClaimResult } from "../result/result.js";
@@ -56,6 +56,7 @@ async function auditFiles(
   folder: ReportFolder | null,
   progress: Progress,
 ): Promise<void> {
+  const { readClaim } = await import("../claim/read.js");
   const outcomes: ReadOutcome[] = [];
   for (const file of files) {
     const outcome = await readClaim(file);
