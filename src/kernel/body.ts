@@ -20,6 +20,8 @@ export interface StepContext {
 export interface StepBody {
   /** Before the loop: what is carried from step to step. */
   readonly before: Code;
+  /** Evaluations that it takes. */
+  readonly evaluationsBefore: number;
   readonly step: Code;
   readonly evaluationsPerStep: number;
   /** Where set, the step keeps count of its evaluations in `evaluations` and sets `failed` where it must. */

@@ -50,12 +50,10 @@ function writeLoop(
   });
   states.forEach((state, i) => {
     code.variable(state, `io[${i}]`);
-    code.variable(previous(state), state);
   });
   code.variable("rate", `io[${2 * n}]`);
   code.counter("taken");
   code.counter("failed");
-  code.variable("evaluations", "0");
   const hoisted = hoistParameters(code, accelerations, isParameter, plain);
   const at =
     (bind: (state: string) => string) =>
@@ -71,26 +69,31 @@ function writeLoop(
     accelerate: (into, prefix, bind) => write(into, accelerations, prefix, bind),
   });
   code.append(body.before);
+  if (body.implicit) code.variable("evaluations", String(body.evaluationsBefore));
+  // The old state is written from where the loop is left: to carry it round would cost moves in every step.
+  const leave = (state: (name: string) => string): void => {
+    states.forEach((name, i) => {
+      code.set(`io[${i}]`, state(name));
+      code.set(`io[${n + i}]`, name);
+    });
+    code.set(`io[${2 * n}]`, "rate");
+    const fixed = `${body.evaluationsBefore} + taken * ${body.evaluationsPerStep}`;
+    code.set(`io[${2 * n + 1}]`, body.implicit ? "evaluations" : fixed);
+    code.set(`io[${2 * n + 2}]`, "failed");
+    code.line("return taken;");
+  };
   code.line("while (taken < steps) {");
   code.append(body.step);
   const rate = write(code, [radialRate], "r", next)[0]!;
   code.define("before", "rate");
   code.set("rate", rate);
-  for (const state of states) {
-    code.set(previous(state), state);
-    code.set(state, next(state));
-  }
   code.line("taken++;");
-  code.line("if (before < 0 && rate >= 0) break;");
+  code.line("if (taken == steps || (before < 0 && rate >= 0)) {");
+  leave(next);
   code.line("}");
-  states.forEach((state, i) => {
-    code.set(`io[${i}]`, state);
-    code.set(`io[${n + i}]`, previous(state));
-  });
-  code.set(`io[${2 * n}]`, "rate");
-  code.set(`io[${2 * n + 1}]`, body.implicit ? "evaluations" : `taken * ${body.evaluationsPerStep}`);
-  code.set(`io[${2 * n + 2}]`, "failed");
-  code.line("return taken;");
+  for (const state of states) code.set(state, next(state));
+  code.line("}");
+  leave((state) => state);
   return { body, text: `${HEADS[dialect]}\n${code.print(dialect)}\n}` };
 }
 
@@ -114,8 +117,6 @@ const HEADS: Readonly<Record<Dialect, string>> = {
   javascript: "function advance(io, parameters, h, steps) {",
   c: "int advance(double *io, const double *parameters, double h, int steps) {",
 };
-
-const previous = (state: string): string => `b_${state}`;
 
 function bodyOf(method: MethodDefinition, context: StepContext): StepBody {
   switch (method.family) {

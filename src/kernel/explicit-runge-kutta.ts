@@ -29,5 +29,11 @@ export function explicitRungeKutta(method: ExplicitRungeKutta, context: StepCont
     });
   }
   for (const state of [...coordinates, ...rates]) step.define(next(state), combine(state, b));
-  return { before: new Code(), step, evaluationsPerStep: b.length, implicit: false };
+  return {
+    before: new Code(),
+    evaluationsBefore: 0,
+    step,
+    evaluationsPerStep: b.length,
+    implicit: false,
+  };
 }

@@ -53,5 +53,11 @@ export function splitting(method: Splitting, context: StepContext): StepBody {
       step.set(name, accelerations![i]!);
     });
   }
-  return { before, step, evaluationsPerStep: evaluations, implicit: false };
+  return {
+    before,
+    evaluationsBefore: carried ? 1 : 0,
+    step,
+    evaluationsPerStep: evaluations,
+    implicit: false,
+  };
 }

@@ -6,7 +6,7 @@ import type { MethodDefinition } from "../methods/definition.js";
  *
  * `io` is a Float64Array of `ioLength`, with n = `dimension`:
  *   [0, n)      the state: coordinates, then rates; read at the call, written at the return
- *   [n, 2n)     out: the state before the last step taken
+ *   [n, 2n)     out: the state before the last step taken; where an implicit step failed, the state itself
  *   [2n]        the radial rate at the state (see below); read and written
  *   [2n + 1]    out: right-hand-side evaluations of this call
  *   [2n + 2]    out: 0, or 1 when an implicit step did not converge to rounding

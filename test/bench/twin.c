@@ -6,7 +6,7 @@
  */
 #include <math.h>
 
-static void post_newtonian(double x, double y, double vx, double vy, double GM, double k, double *ax, double *ay) {
+static inline void post_newtonian(double x, double y, double vx, double vy, double GM, double k, double *ax, double *ay) {
   double s = 1 / sqrt(x * x + y * y);
   double m = GM * s;
   double g = m * s;
@@ -77,6 +77,6 @@ int leapfrog_newtonian(double *io, const double *parameters, double h, int steps
   }
   io[0] = x, io[1] = y, io[2] = vx, io[3] = vy;
   io[4] = ox, io[5] = oy, io[6] = ovx, io[7] = ovy;
-  io[8] = rate, io[9] = taken, io[10] = 0;
+  io[8] = rate, io[9] = 1 + taken, io[10] = 0;
   return taken;
 }

@@ -13,16 +13,31 @@ export function hasGcc(): boolean {
   }
 }
 
-/** Compiles a C program as plainly as anybody would, runs it, and gives what it prints. */
-export function runC(source: string, args: readonly string[] = []): string {
+/** A C program compiled as plainly as anybody would, and ready to run. */
+export interface Compiled {
+  /** @returns what it prints */
+  run(): string;
+  remove(): void;
+}
+
+export function compileC(source: string): Compiled {
   const folder = mkdtempSync(join(tmpdir(), "twin-"));
+  const file = join(folder, "twin.c");
+  const program = join(folder, "twin");
+  writeFileSync(file, source);
+  execFileSync("gcc", ["-O2", "-ffp-contract=off", "-o", program, file, "-lm"]);
+  return {
+    run: () => execFileSync(program, { encoding: "utf8", maxBuffer: 1 << 26 }),
+    remove: () => rmSync(folder, { recursive: true, force: true }),
+  };
+}
+
+/** Compiles a C program, runs it once, and gives what it prints. */
+export function runC(source: string): string {
+  const program = compileC(source);
   try {
-    const file = join(folder, "twin.c");
-    const program = join(folder, "twin");
-    writeFileSync(file, source);
-    execFileSync("gcc", ["-O2", "-ffp-contract=off", "-o", program, file, "-lm"]);
-    return execFileSync(program, [...args], { encoding: "utf8", maxBuffer: 1 << 26 });
+    return program.run();
   } finally {
-    rmSync(folder, { recursive: true, force: true });
+    program.remove();
   }
 }
