@@ -20,6 +20,7 @@ export async function renderPage(result: ClaimResult): Promise<string> {
   return render({
     title: clean(result.title),
     file: clean(result.file),
+    isUntitled: result.title === result.file,
     verdict: VERDICT_TITLES[verdict],
     // What is wrong with a claim that could not be read is told in the claim's own characters.
     reason: setup === null ? clean(result.reason) : typeset(clean(result.reason)),
