@@ -35,6 +35,7 @@ async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions):
   if ("problem" in prepared) return undetermined(claim.file, prepared.problem, claim, claim);
 
   const investigation = await investigate(claim, prepared, pool, options);
+  if ("problem" in investigation) return undetermined(claim.file, investigation.problem, claim, claim);
   const { unit, baseline } = claim.claimed;
   const { scenario } = prepared;
   const ladders = investigation.ladders.map((ladder) =>

@@ -58,7 +58,7 @@ function solutionEvidence(
     raw: value,
     null: base,
     value: figure,
-    rounding: solution.rounding ?? 0,
+    rounding: solution.rounding,
     readingOff: Math.hypot(ofRun, ofNull),
   };
 }

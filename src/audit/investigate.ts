@@ -20,15 +20,17 @@ export interface Investigation {
   readonly best: BestValue | null;
 }
 
-/** Evaluations that a whole audit may take by default: some ten seconds on one core. */
+/** Evaluations that a whole audit takes by choice: some ten seconds on one core. */
 const AFFORDABLE = 1e9;
+/** Evaluations that it takes where the author's own step asks for them: some minutes. */
+const MOST = 2e10;
 
 export async function investigate(
   claim: Claim,
   prepared: Prepared,
   pool: JobPool,
   options: ExecuteOptions,
-): Promise<Investigation> {
+): Promise<Investigation | { readonly problem: string }> {
   const { recipe, scenario, witnesses, authorsStep } = prepared;
   const { unit, baseline } = claim.claimed;
   const subtracted = baseline === "subtracted";
@@ -36,13 +38,16 @@ export async function investigate(
   const methods = authors === null ? [...witnesses] : [authors, ...witnesses];
   const orbits = nominalLength(scenario) / scenario.period;
   const perStep = methods.reduce((sum, method) => sum + costPerStep(method), 0);
-  const plan = planLadder(
-    authorsStep,
-    scenario.period,
-    claim.audit.rungs,
-    (stepsPerOrbit) => stepsPerOrbit * orbits * perStep * (subtracted ? 2 : 1),
-    AFFORDABLE,
-  );
+  const cost = (stepsPerOrbit: number): number => stepsPerOrbit * orbits * perStep * (subtracted ? 2 : 1);
+  const authorsCost = authorsStep === null ? 0 : cost(scenario.period / authorsStep);
+  if (authorsCost > MOST) {
+    return {
+      problem:
+        `the author's step over the span takes ${authorsCost.toExponential(1)} evaluations with ${methods.length} methods, ` +
+        `and an audit spends at most ${MOST.toExponential(0)}: a shorter span shows the same, or fewer witnesses`,
+    };
+  }
+  const plan = planLadder(authorsStep, scenario.period, claim.audit.rungs, cost, AFFORDABLE);
   const ensembleRung = plan.authors ?? Math.floor(plan.steps.length / 2);
   const tasks = methods.flatMap((method) =>
     planTasks(method, scenario, plan, ensembleRung, {

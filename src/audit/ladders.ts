@@ -20,8 +20,8 @@ export interface AnalysedLadder {
   readonly analysis: LadderAnalysis;
   readonly stateDistances: readonly Difference[];
   readonly stateOrder: StateOrder | null;
-  /** 95 % half-width of rounding in the claim's figure at the ensemble's rung; null if not measured. */
-  readonly rounding: number | null;
+  /** 95 % half-width of rounding in the claim's figure at the ensemble's rung. */
+  readonly rounding: number;
 }
 
 /**
@@ -38,9 +38,10 @@ export function analyse(
   unit: QuotedUnit,
   subtracted: boolean,
 ): AnalysedLadder {
-  const raw = points(runs, unit, (on) => on);
-  const off = points(runs, unit, (_, off) => off);
-  const difference = differencePoints(runs, unit);
+  const push = coefficientPush(scenario, unit);
+  const raw = points(runs, unit, push, (on) => on);
+  const off = points(runs, unit, push, (_, off) => off);
+  const difference = differencePoints(runs, unit, push);
   const figure = subtracted ? difference.points : raw.points;
   const analysis = subtracted
     ? subtractedAnalysis(analyseLadder(raw.points), analyseLadder(off.points), analyseLadder(figure))
@@ -60,45 +61,63 @@ export function analyse(
 
 interface Points {
   readonly points: readonly LadderPoint[];
-  readonly rounding: number | null;
+  readonly rounding: number;
 }
 
 function points(
   runs: MethodRuns,
   unit: QuotedUnit,
+  push: number,
   pick: (on: Reading | null, off: Reading | null) => Reading | null,
 ): Points {
   return withFloor(
     runs,
+    push,
     runs.rungs.map((rung) => figureOf(pick(rung.on, rung.off), unit)),
     runs.ensemble.on.map((on, i) => figureOf(pick(on, runs.ensemble.off[i] ?? null), unit)),
   );
 }
 
-function differencePoints(runs: MethodRuns, unit: QuotedUnit): Points {
+function differencePoints(runs: MethodRuns, unit: QuotedUnit, push: number): Points {
   const difference = (on: Reading | null, off: Reading | null): number | null => {
     const [value, base] = [figureOf(on, unit), figureOf(off, unit)];
     return value === null || base === null ? null : value - base;
   };
   return withFloor(
     runs,
+    push,
     runs.rungs.map((rung) => difference(rung.on, rung.off)),
     runs.ensemble.on.map((on, i) => difference(on, runs.ensemble.off[i] ?? null)),
   );
 }
 
 /**
+ * What rounded coefficients may do to the advance, in the claim's unit. They push every step, and every
+ * member of an ensemble, the same way: by a unit of the last place of the increments, which add up to 2π
+ * times the state in each orbit; and a push across the orbit turns the apsis by 1/e times as much.
+ */
+function coefficientPush({ eccentricity, period }: PreparedScenario, unit: QuotedUnit): number {
+  const perOrbit = (2 * Math.PI * Number.EPSILON) / eccentricity / unit.radians;
+  return unit.per === "orbit" ? perOrbit : (perOrbit * unit.per) / period;
+}
+
+/**
  * Rounding walks at random: it grows as the square root of the number of steps (Brouwer, A. J. 46, 149,
- * 1937). On rungs coarser than the ensemble's it is not taken to be less.
+ * 1937). On rungs coarser than the ensemble's it is not taken to be less. What is common to all members does
+ * not show in their spread and is added to it.
  */
 function withFloor(
   runs: MethodRuns,
+  push: number,
   values: readonly (number | null)[],
   members: readonly (number | null)[],
 ): Points {
-  const rounding = roundingHalfWidth(members);
+  const spread = roundingHalfWidth(members);
   const growth = (k: number) => Math.max(1, 2 ** ((k - runs.ensemble.rung) / 2));
-  return { points: values.map((value, k) => ({ value, floor: (rounding ?? 0) * growth(k) })), rounding };
+  return {
+    points: values.map((value, k) => ({ value, floor: Math.hypot(push, (spread ?? 0) * growth(k)) })),
+    rounding: Math.hypot(push, spread ?? 0),
+  };
 }
 
 function subtractedAnalysis(

@@ -1,3 +1,5 @@
+import type { RungStatus } from "./result.js";
+
 /** A size in a sentence: three significant digits, without an exponent where it reads well. */
 export function size(value: number): string {
   const magnitude = Math.abs(value);
@@ -35,3 +37,13 @@ export const plural = (count: number, noun: string): string => `${count} ${noun}
 /** Steps an orbit in a sentence. */
 export const steps = (perOrbit: number): string =>
   `${Number.isInteger(perOrbit) || perOrbit >= 100 ? Math.round(perOrbit) : perOrbit.toPrecision(3)} steps an orbit`;
+
+/** How a run ended, after "its run". */
+export const ENDINGS: Readonly<Record<RungStatus, string>> = {
+  ok: "came to its end",
+  escaped: "escaped: the orbit opened",
+  "non-finite": "left the numbers: a state was infinite or not a number",
+  "too-few-passages": "saw fewer than three periapsis passages",
+  "timed-out": "did not reach its end in several times the steps that it should take",
+  unconverged: "met an implicit step that did not converge to rounding",
+};

@@ -1,5 +1,5 @@
 import type { Check, CheckName } from "../result/result.js";
-import { bestInWords, plural, size, steps } from "../result/words.js";
+import { bestInWords, ENDINGS, plural, size, steps } from "../result/words.js";
 import { standingDigits } from "./digits.js";
 import { type Conclusion, type Evidence, type SolutionError, solutionError } from "./evidence.js";
 
@@ -34,11 +34,6 @@ function undetermined(evidence: Evidence, outcome: Lookup): Conclusion | null {
     );
   }
   if (solution === null) return say(textOnly(evidence as Decidable));
-  if (solution.status === "timed-out") {
-    return say(
-      `The author's own run, ${solution.method} at ${steps(solution.stepsPerOrbit)}, was not carried to its end: it takes more evaluations than an audit may spend.`,
-    );
-  }
   const error = solutionError(evidence);
   if (error === null) return null;
   const third = claimed.halfWidth / 3;
@@ -75,7 +70,7 @@ function decide(evidence: Decidable, outcome: Lookup, error: SolutionError | nul
     const ended = solution.status === "ok" ? solution.nullStatus : solution.status;
     return {
       verdict: "not-resolved",
-      reason: `The stated solution, ${how}, gives no figure: its run ended as ${ended}. The equations give ${value}.`,
+      reason: `The stated solution, ${how}, gives no figure: ${solution.status === "ok" ? "its null run" : "its run"} ${ENDINGS[ended]}. The equations give ${value}.`,
     };
   }
   if (distance > claimed.halfWidth + best.halfWidth + error.bound) {

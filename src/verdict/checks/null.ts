@@ -1,5 +1,5 @@
 import type { Check } from "../../result/result.js";
-import { size } from "../../result/words.js";
+import { ENDINGS, size } from "../../result/words.js";
 import type { Evidence } from "../evidence.js";
 import { atMost, check, NO_SOLUTION, notChecked } from "./common.js";
 
@@ -11,7 +11,7 @@ export function nullRun({ claimed, solution, nullExists }: Evidence): Check {
   if (solution === null) return notChecked("null", NO_SOLUTION);
   const limit = FAR_BELOW * claimed.halfWidth;
   if (solution.null === null) {
-    return check("null", "fail", `The null run gives no figure: it ended as ${solution.nullStatus}.`);
+    return check("null", "fail", `The null run gives no figure: it ${ENDINGS[solution.nullStatus]}.`);
   }
   const shown = `${size(solution.null)} ${claimed.unit}`;
   if (claimed.baseline === "subtracted") {

@@ -1,5 +1,5 @@
 import type { Check } from "../../result/result.js";
-import { figure, size, steps } from "../../result/words.js";
+import { ENDINGS, figure, size, steps } from "../../result/words.js";
 import type { Evidence, SolutionEvidence } from "../evidence.js";
 import { atMost, check, NO_SOLUTION, notChecked } from "./common.js";
 
@@ -13,7 +13,7 @@ export function reproduces({ claimed, solution, nullExists }: Evidence): Check {
     return check(
       "reproduces",
       "fail",
-      `${solution.method} at ${steps(solution.stepsPerOrbit)} gives no figure.`,
+      `${solution.method} at ${steps(solution.stepsPerOrbit)} gives no figure: ${solution.status === "ok" ? "its null run" : "its run"} ${ENDINGS[solution.status === "ok" ? solution.nullStatus : solution.status]}.`,
     );
   }
   const distance = Math.abs(claimed.value - solution.value);
