@@ -1,78 +1,106 @@
 import type { FunctionName, Graph, Node } from "./graph.js";
-import { inOrder } from "./walk.js";
+import { inOrder, mentions } from "./walk.js";
 
 /**
- * Derivative of an expression with respect to a symbol, by the rules of the calculus; shared subexpressions
- * stay shared.
+ * Derivatives of an expression with respect to symbols, by the rules of the calculus taken from the expression
+ * down to its symbols (reverse accumulation; A. Griewank and A. Walther, Evaluating Derivatives, 2nd ed. (SIAM,
+ * 2008), 3.2): what the derivatives have in common is shared.
  */
+export function gradient(graph: Graph, node: Node, symbols: readonly string[]): Node[] {
+  const known = new Map<Node, boolean>();
+  const depends = (n: Node): boolean => known.get(n)!;
+  mentions(node, (name) => symbols.includes(name), known);
+  /** Derivative of the whole expression with respect to each of its parts. */
+  const derivatives = new Map([[node, graph.one]]);
+  for (const n of inOrder(node).reverse()) {
+    const outer = derivatives.get(n);
+    if (outer === undefined || !depends(n)) continue;
+    const parts = rule(graph, n, outer, depends);
+    n.args.forEach((argument, i) => {
+      if (!depends(argument)) return;
+      const before = derivatives.get(argument);
+      derivatives.set(argument, before === undefined ? parts[i]!() : graph.add(before, parts[i]!()));
+    });
+  }
+  return symbols.map((name) => derivatives.get(graph.symbol(name)) ?? graph.zero);
+}
+
+/** Derivative of an expression with respect to a symbol. */
 export function differentiate(graph: Graph, node: Node, symbol: string): Node {
-  const known = new Map<Node, Node>();
-  const of = (n: Node): Node => known.get(n)!;
-  const rule = (n: Node): Node => {
-    const [a, b] = n.args as [Node, Node];
-    switch (n.op) {
-      case "number":
-        return graph.zero;
-      case "symbol":
-        return n.name === symbol ? graph.one : graph.zero;
-      case "add":
-        return graph.add(of(a), of(b));
-      case "subtract":
-        return graph.subtract(of(a), of(b));
-      case "negate":
-        return graph.negate(of(a));
-      case "multiply":
-        return graph.add(graph.multiply(of(a), b), graph.multiply(a, of(b)));
-      case "divide":
-        return graph.multiply(graph.subtract(of(a), graph.multiply(n, of(b))), inverse(graph, b));
-      case "power":
-        return power(n, a, b);
-      default:
-        return chain(graph, n.op, n, a, of(a));
-    }
-  };
-  const power = (n: Node, base: Node, exponent: Node): Node => {
-    if (exponent.value !== null) {
-      const lower = graph.power(base, graph.subtract(exponent, graph.one));
-      return graph.multiply(graph.multiply(exponent, lower), of(base));
-    }
-    const growth = graph.multiply(of(exponent), graph.call("log", base));
-    return graph.multiply(n, graph.add(growth, graph.divide(graph.multiply(exponent, of(base)), base)));
-  };
-  for (const n of inOrder(node)) known.set(n, rule(n));
-  return of(node);
+  return gradient(graph, node, [symbol])[0]!;
+}
+
+/** Derivative with respect to each argument of `n`, times `outer`, which is that with respect to `n`. */
+function rule(graph: Graph, n: Node, outer: Node, depends: (n: Node) => boolean): readonly (() => Node)[] {
+  const [a, b] = n.args as [Node, Node];
+  switch (n.op) {
+    case "number":
+    case "symbol":
+      return [];
+    case "add":
+      return [() => outer, () => outer];
+    case "subtract":
+      return [() => outer, () => graph.negate(outer)];
+    case "negate":
+      return [() => graph.negate(outer)];
+    case "multiply":
+      return [() => graph.multiply(outer, b), () => graph.multiply(outer, a)];
+    case "divide":
+      return quotient(graph, n, outer);
+    case "power":
+      return power(graph, n, outer, depends(b));
+    default:
+      return [() => chain(graph, n.op as FunctionName, n, a, outer)];
+  }
 }
 
 /** A reciprocal is shared by all derivatives that need it, where a quotient each would divide each time. */
-function inverse(graph: Graph, node: Node): Node {
-  return graph.divide(graph.one, node);
+const inverse = (graph: Graph, node: Node): Node => graph.divide(graph.one, node);
+
+function quotient(graph: Graph, n: Node, outer: Node): readonly (() => Node)[] {
+  const [a, b] = n.args as [Node, Node];
+  const ofNumerator = (): Node => graph.multiply(outer, inverse(graph, b));
+  if (a === graph.one) return [ofNumerator, () => graph.negate(graph.multiply(outer, graph.multiply(n, n)))];
+  return [ofNumerator, () => graph.negate(graph.multiply(ofNumerator(), n))];
 }
 
-/** d f(a) = f'(a) da; `n` is f(a) itself. */
-function chain(graph: Graph, name: FunctionName, n: Node, a: Node, da: Node): Node {
-  if (da === graph.zero) return da;
+function power(graph: Graph, n: Node, outer: Node, exponentVaries: boolean): readonly (() => Node)[] {
+  const [base, exponent] = n.args as [Node, Node];
+  const lower = (): Node =>
+    exponentVaries
+      ? graph.multiply(n, inverse(graph, base))
+      : graph.power(base, graph.subtract(exponent, graph.one));
+  return [
+    () => graph.multiply(outer, graph.multiply(exponent, lower())),
+    () => graph.multiply(outer, graph.multiply(n, graph.call("log", base))),
+  ];
+}
+
+/** f'(a) times `outer`; `n` is f(a) itself. */
+function chain(graph: Graph, name: FunctionName, n: Node, a: Node, outer: Node): Node {
   const square = (x: Node): Node => graph.multiply(x, x);
   const cosineOfArc = (): Node => graph.call("sqrt", graph.subtract(graph.one, square(a)));
+  const times = (slope: Node): Node => graph.multiply(outer, slope);
   switch (name) {
     case "sqrt":
-      return graph.multiply(da, graph.multiply(graph.number("0.5"), inverse(graph, n)));
+      return times(graph.multiply(graph.number("0.5"), inverse(graph, n)));
     case "sin":
-      return graph.multiply(graph.call("cos", a), da);
+      return times(graph.call("cos", a));
     case "cos":
-      return graph.negate(graph.multiply(graph.call("sin", a), da));
+      return times(graph.negate(graph.call("sin", a)));
     case "tan":
-      return graph.multiply(graph.add(graph.one, square(n)), da);
+      return times(graph.add(graph.one, square(n)));
     case "asin":
-      return graph.divide(da, cosineOfArc());
+      return graph.divide(outer, cosineOfArc());
     case "acos":
-      return graph.negate(graph.divide(da, cosineOfArc()));
+      return graph.negate(graph.divide(outer, cosineOfArc()));
     case "atan":
-      return graph.divide(da, graph.add(graph.one, square(a)));
+      return graph.divide(outer, graph.add(graph.one, square(a)));
     case "exp":
-      return graph.multiply(n, da);
+      return times(n);
     case "log":
-      return graph.divide(da, a);
+      return graph.divide(outer, a);
     case "abs":
-      return graph.multiply(graph.divide(a, n), da);
+      return times(graph.divide(a, n));
   }
 }

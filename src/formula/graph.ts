@@ -48,8 +48,9 @@ const LARGEST_WHOLE_POWER = 32n;
 
 /**
  * Builds expressions so that equal ones are shared. Simplifies only what is exact: numbers are folded as
- * fractions, and zeros, ones and double signs disappear. Nothing is reassociated: the order of operations is
- * that of the text.
+ * fractions, zeros, ones and double signs disappear, and what rounds nothing - signs and small powers of two -
+ * moves out of products and quotients to meet its like. Otherwise the operations are those of the text, in its
+ * order.
  *
  * An expression times an exact zero is zero, though floating point would make it NaN where the expression
  * is infinite: a parameter folded to zero takes its whole term with it.
@@ -65,7 +66,10 @@ export class Graph {
     value: Fraction | null = null,
     name: string | null = null,
   ): Node {
-    const key = `${op} ${value?.toFraction() ?? name ?? args.map((argument) => argument.id).join()}`;
+    const ids = args.map((argument) => argument.id);
+    // Sums and products are the same bits either way round.
+    if (op === "add" || op === "multiply") ids.sort((one, other) => one - other);
+    const key = `${op} ${value?.toFraction() ?? name ?? ids.join()}`;
     let node = this.#nodes.get(key);
     if (node === undefined) {
       node = { id: this.#nodes.size, op, args, value, name };
@@ -100,6 +104,8 @@ export class Graph {
     if (a === this.zero) return b;
     if (b === this.zero) return a;
     if (b.op === "negate") return this.subtract(a, b.args[0]!);
+    if (a.op === "negate") return this.subtract(b, a.args[0]!);
+    if (a === b) return this.multiply(this.number(2), a);
     return this.#intern("add", [a, b]);
   }
 
@@ -110,6 +116,7 @@ export class Graph {
     if (a === this.zero) return this.negate(b);
     if (a === b) return this.zero;
     if (b.op === "negate") return this.add(a, b.args[0]!);
+    if (a.op === "negate") return this.negate(this.add(a.args[0]!, b));
     return this.#intern("subtract", [a, b]);
   }
 
@@ -121,7 +128,12 @@ export class Graph {
     if (b === this.one) return a;
     if (a.op === "negate") return this.negate(this.multiply(a.args[0]!, b));
     if (b.op === "negate") return this.negate(this.multiply(a, b.args[0]!));
-    return this.#intern("multiply", [a, b]);
+    const [p, x] = this.#scaled(a);
+    const [q, y] = this.#scaled(b);
+    const scale = p.mul(q);
+    if ((x === a && y === b) || !isSmallPowerOfTwo(scale)) return this.#intern("multiply", [a, b]);
+    const product = this.multiply(x, y);
+    return scale.equals(1) ? product : this.#intern("multiply", [this.number(scale), product]);
   }
 
   divide(a: Node, b: Node): Node {
@@ -131,7 +143,20 @@ export class Graph {
     if (b === this.one) return a;
     if (a.op === "negate") return this.negate(this.divide(a.args[0]!, b));
     if (b.op === "negate") return this.negate(this.divide(a, b.args[0]!));
-    return this.#intern("divide", [a, b]);
+    const [p, x] = this.#scaled(a);
+    const [q, y] = this.#scaled(b);
+    const scale = p.div(q);
+    if ((x === a && y === b) || !isSmallPowerOfTwo(scale)) return this.#intern("divide", [a, b]);
+    return this.multiply(this.number(scale), this.divide(x, y));
+  }
+
+  /** A node as a power of two times the rest. */
+  #scaled(node: Node): readonly [Fraction, Node] {
+    if (node.value !== null && isSmallPowerOfTwo(node.value)) return [node.value, this.one];
+    const [factor, rest] = node.op === "multiply" ? (node.args as [Node, Node]) : [node, node];
+    if (rest !== node && factor.value !== null && isSmallPowerOfTwo(factor.value))
+      return [factor.value, rest];
+    return [ONE, node];
   }
 
   negate(a: Node): Node {
@@ -188,4 +213,14 @@ export class Graph {
         return this.call(node.op, a);
     }
   }
+}
+
+const ONE = new Fraction(1);
+
+/** Powers up to this go where they may: beyond, a product could overflow that as written would not. */
+const LARGEST_POWER_OF_TWO = 1n << 64n;
+
+function isSmallPowerOfTwo({ n, d, s }: Fraction): boolean {
+  const whole = n > d ? n : d;
+  return s > 0n && n > 0n && (n & (n - 1n)) === 0n && (d & (d - 1n)) === 0n && whole <= LARGEST_POWER_OF_TWO;
 }

@@ -51,9 +51,19 @@ export function substitute(graph: Graph, node: Node, replacements: ReadonlyMap<s
   );
 }
 
-/** Whether an expression mentions a symbol that satisfies a condition. */
-export function mentions(node: Node, condition: (name: string) => boolean): boolean {
-  return fold<boolean>(node, (n, args) => (n.op === "symbol" ? condition(n.name!) : args.some(Boolean)));
+/**
+ * Whether an expression mentions a symbol that satisfies a condition.
+ *
+ * @param known gets the answer for every part of the expression
+ */
+export function mentions(
+  node: Node,
+  condition: (name: string) => boolean,
+  known = new Map<Node, boolean>(),
+): boolean {
+  const rule = (n: Node, args: readonly boolean[]): boolean =>
+    n.op === "symbol" ? condition(n.name!) : args.some(Boolean);
+  return fold(node, rule, known);
 }
 
 /** Value of an expression in double precision. */

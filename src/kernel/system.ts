@@ -1,5 +1,5 @@
 import type { EquationsDefinition } from "../equations/definition.js";
-import { differentiate } from "../formula/differentiate.js";
+import { gradient } from "../formula/differentiate.js";
 import { Graph, type Node } from "../formula/graph.js";
 import { parseFormula } from "../formula/parse.js";
 import { mentions, substitute } from "../formula/walk.js";
@@ -64,11 +64,14 @@ export function compileSystem(definition: EquationsDefinition, given: Specialisa
   for (const [name, text] of Object.entries(definition.let ?? {})) scope.set(name, read(text));
 
   const potential = definition.potential === undefined ? null : read(definition.potential);
-  const accelerations = all.map(([name]) =>
+  const accelerations =
     potential === null
-      ? read(definition.acceleration![name]!)
-      : graph.negate(differentiate(graph, potential, name)),
-  );
+      ? all.map(([name]) => read(definition.acceleration![name]!))
+      : gradient(
+          graph,
+          graph.negate(potential),
+          all.map(([name]) => name),
+        );
   const conserved: ConservedQuantity[] = Object.entries(definition.conserved).map(
     ([name, { formula, truncatedAt }]) => ({
       name,

@@ -55,9 +55,8 @@ int leapfrog_newtonian(double *io, const double *parameters, double h, int steps
   double GM = parameters[0], half = 0.5 * h;
   double x = io[0], y = io[1], vx = io[2], vy = io[3], rate = io[8];
   double ox = x, oy = y, ovx = vx, ovy = vy;
-  /* -GM times the gradient of s = 1/r, by the chain rule through r^2 and r. */
-  double s = 1 / sqrt(x * x + y * y);
-  double ax = -(GM * (s * ((x + x) * (0.5 * s)) * s)), ay = -(GM * (s * ((y + y) * (0.5 * s)) * s));
+  double s = 1 / sqrt(x * x + y * y), g = GM * (s * s) * s;
+  double ax = -(g * x), ay = -(g * y);
   int taken = 0;
   while (taken < steps) {
     ox = x, oy = y, ovx = vx, ovy = vy;
@@ -66,8 +65,9 @@ int leapfrog_newtonian(double *io, const double *parameters, double h, int steps
     x += h * vx;
     y += h * vy;
     s = 1 / sqrt(x * x + y * y);
-    ax = -(GM * (s * ((x + x) * (0.5 * s)) * s));
-    ay = -(GM * (s * ((y + y) * (0.5 * s)) * s));
+    g = GM * (s * s) * s;
+    ax = -(g * x);
+    ay = -(g * y);
     vx += half * ax;
     vy += half * ay;
     double before = rate;
