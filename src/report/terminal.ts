@@ -14,7 +14,7 @@ export interface TerminalOptions {
 type Style = Parameters<typeof styleText>[0];
 type Paint = (style: Style, text: string) => string;
 
-export const VERDICT_WORDS: Readonly<Record<Verdict, string>> = {
+const VERDICT_WORDS: Readonly<Record<Verdict, string>> = {
   resolved: "RESOLVED",
   "partly-resolved": "PARTLY RESOLVED",
   "not-resolved": "NOT RESOLVED",

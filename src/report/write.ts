@@ -1,5 +1,5 @@
 import { rmSync } from "node:fs";
-import { mkdir, rename, rm, writeFile } from "node:fs/promises";
+import { rename, rm, writeFile } from "node:fs/promises";
 import { basename, dirname, join } from "node:path";
 
 /** Temporary files under way: removed when the program is interrupted. */
@@ -30,11 +30,6 @@ async function orExplain<T>(path: string, work: Promise<T>): Promise<T> {
     if (code === undefined) throw error;
     throw new WriteError(`cannot write ${path}: ${REASONS[code] ?? code}`);
   }
-}
-
-/** Makes a folder, with those above it. @throws WriteError */
-export async function makeFolder(path: string): Promise<void> {
-  await orExplain(path, mkdir(path, { recursive: true }));
 }
 
 /** Writes a file whole or not at all: under another name in the same folder first. @throws WriteError */

@@ -2,7 +2,7 @@
  * Probability that |t| stays within `t` for Student's distribution of `degrees` (a whole number, 1 or more).
  * Finite series of Abramowitz and Stegun, Handbook of Mathematical Functions (1964), 26.7.3 and 26.7.4.
  */
-export function studentTWithin(t: number, degrees: number): number {
+function studentTWithin(t: number, degrees: number): number {
   const theta = Math.atan(t / Math.sqrt(degrees));
   const cosine = Math.cos(theta);
   let term = degrees % 2 === 0 ? 1 : cosine;

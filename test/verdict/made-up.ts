@@ -63,7 +63,7 @@ export function entry(quantity: string, changes: Partial<LedgerEntry> = {}): Led
   };
 }
 
-export function ladder(method: string, role: Ladder["role"], changes: Partial<Ladder> = {}): Ladder {
+function ladder(method: string, role: Ladder["role"], changes: Partial<Ladder> = {}): Ladder {
   return {
     method,
     role,

@@ -23,7 +23,7 @@ export function canvas(): Promise<Canvas> {
 
 /** A plot is drawn at two widths, so that its labels have the same size on a telephone as on a desk. */
 export type Size = "wide" | "narrow";
-export const WIDTHS: Readonly<Record<Size, number>> = { wide: 720, narrow: 340 };
+const WIDTHS: Readonly<Record<Size, number>> = { wide: 720, narrow: 340 };
 const BOTH: readonly Size[] = ["wide", "narrow"];
 
 export interface Drawing {
@@ -68,17 +68,7 @@ export function draw({ plot, document }: Canvas, drawing: Drawing): string {
         return element;
       };
       svg.prepend(said("title", "title", drawing.title), said("desc", "says", drawing.says));
-      return withOwnIds(svg.outerHTML, id);
+      return svg.outerHTML;
     })
     .join("");
-}
-
-/** The library numbers its clip paths through the life of the process; a page must not depend on that. */
-function withOwnIds(svg: string, id: string): string {
-  const seen = new Map<string, string>();
-  return svg.replaceAll(/plot-clip-\d+/g, (name) => {
-    const own = seen.get(name) ?? `${id}-clip-${seen.size}`;
-    seen.set(name, own);
-    return own;
-  });
 }

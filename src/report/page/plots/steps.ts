@@ -2,6 +2,7 @@ import type { ClaimResult } from "../../../result/result.js";
 import { figure, size as inWords } from "../../../result/words.js";
 import { typeset } from "../typeset.js";
 import { axes, linearTicks, rungTicks } from "./axes.js";
+import { clip } from "./clip.js";
 import { type Canvas, draw, type Plot } from "./frame.js";
 import { spread } from "./labels.js";
 import { note } from "./notes.js";
@@ -79,14 +80,17 @@ function freeShare({ series, authors, y }: StepsView, best: number | null): numb
 
 function curve(plot: Plot, { points, ink, dash, symbol }: Series, { x, y }: StepsView) {
   const inside = points.filter(({ n, value }) => n >= x[0] && value >= y[0] && value <= y[1]);
+  const line = clip(
+    points.filter(({ n }) => n >= x[0]),
+    y,
+  );
   return [
-    plot.line(points, {
-      x: points.map(({ n }) => n),
-      y: points.map(({ value }) => value),
+    plot.line(line, {
+      x: line.map(({ n }) => n),
+      y: line.map(({ value }) => value),
       stroke: ink,
       strokeWidth: 1.8,
       strokeDasharray: dash,
-      clip: true,
     }),
     plot.dot(inside, {
       x: inside.map(({ n }) => n),
