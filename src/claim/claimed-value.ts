@@ -1,6 +1,6 @@
 import Fraction from "fraction.js";
+import { nearestDouble } from "../formula/nearest-double.js";
 import type { QuotedUnit } from "./claim.js";
-import { nearestDouble } from "./exact.js";
 import { nearest } from "./nearest.js";
 import { echo } from "./problem.js";
 import { type Misreading, sensibleDecimal } from "./quantity.js";

@@ -1,6 +1,6 @@
 import type Fraction from "fraction.js";
 import { exactDecimal } from "../formula/decimal.js";
-import { nearestDouble } from "./exact.js";
+import { nearestDouble } from "../formula/nearest-double.js";
 import { nearest } from "./nearest.js";
 import { echo } from "./problem.js";
 import { NO_UNIT, parseUnit, sameDimension, type Unit, unitsCatalog } from "./units.js";

@@ -2,8 +2,8 @@ import { Decimal } from "decimal.js";
 import fc from "fast-check";
 import Fraction from "fraction.js";
 import { describe, expect, it } from "vitest";
-import { nearestDouble } from "../../src/claim/exact.js";
 import { parseQuantity } from "../../src/claim/quantity.js";
+import { nearestDouble } from "../../src/formula/nearest-double.js";
 
 const si = (text: string | number, unit: string): number => {
   const read = parseQuantity(text, unit);
