@@ -102,7 +102,7 @@ function parseQuotedUnit(text: string): QuotedUnit | Misreading {
   }
   const perUnit = per === "orbit" ? null : namedUnit(per);
   if (perUnit === undefined || (perUnit !== null && perUnit.dimension.time !== 1)) {
-    return { found: `'per ${per}'`, wanted: suggestion(per, ["orbit", ...TIMES], "a time or orbit") };
+    return { found: `per ${echo(per)}`, wanted: suggestion(per, ["orbit", ...TIMES], "a time or orbit") };
   }
   return {
     text: `${angle}/${per}`,

@@ -13,7 +13,7 @@ export interface Problem {
 /** One line: `file:line:column: path: found ..., wanted ...`. */
 export function formatProblem({ file, line, column, path, found, wanted }: Problem): string {
   const place = line === null ? file : `${file}:${line}:${column}`;
-  return `${place}: ${path === "" ? "" : `${path}: `}found ${found}; wanted ${wanted}`;
+  return onOneLine(`${place}: ${path === "" ? "" : `${path}: `}found ${found}; wanted ${wanted}`);
 }
 
 const LONGEST_ECHO = 60;
@@ -24,8 +24,12 @@ export function echo(value: unknown): string {
   if (value === null) return "nothing";
   if (Array.isArray(value)) return "a list";
   if (typeof value === "object") return "a block of keys";
-  const text = String(value).replaceAll(/[\p{Cc}\p{Cf}\u2028\u2029]+/gu, " ");
-  const characters = [...text];
-  const shown = characters.length > LONGEST_ECHO ? `${characters.slice(0, LONGEST_ECHO).join("")}…` : text;
-  return `'${shown}'`;
+  const characters = [...onOneLine(String(value))];
+  const cut = characters.length > LONGEST_ECHO;
+  return `'${cut ? `${characters.slice(0, LONGEST_ECHO).join("")}…` : characters.join("")}'`;
+}
+
+/** Without control characters, invisible marks of direction and halves of surrogate pairs. */
+function onOneLine(text: string): string {
+  return text.replaceAll(/[\p{Cc}\p{Cf}\p{Cs}\u2028\u2029]+/gu, " ");
 }

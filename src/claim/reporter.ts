@@ -30,7 +30,8 @@ export class Reporter {
 
   unknownKey(path: Path, known: readonly string[]): void {
     const key = String(path.at(-1));
-    this.atKey(path, { found: `the unknown key ${echo(key)}`, wanted: oneOf(key, known) });
+    const place = this.#document.placeOfKey(path);
+    this.#add(path.slice(0, -1), place, `the unknown key ${echo(key)}`, oneOf(key, known));
   }
 
   /** Reads a quantity; null, with a problem noted, when it cannot be read or is not as it must be. */

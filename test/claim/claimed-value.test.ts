@@ -48,7 +48,7 @@ describe("a quoted figure", () => {
     ["42.98", /'42.98'/],
     ["42.98 arcsec", /'arcsec'/],
     ["42.98 km/century", /'km'/],
-    ["42.98 arcsec/fortnight", /per fortnight/],
+    ["42.98 arcsec/fortnight", /per 'fortnight'/],
     ["42.98(0) arcsec/century", /margin of zero/],
     ["42.98 ± 0 arcsec/century", /margin of zero/],
     ["about 43 arcsec/century", /about 43/],
