@@ -9,7 +9,7 @@ import type { Reading } from "./job.js";
 import { ladderResult } from "./ladder-result.js";
 import { ledgerOf } from "./ledger.js";
 import { createPool, type JobPool } from "./pool.js";
-import { prepare } from "./prepare.js";
+import { type Prepared, prepare } from "./prepare.js";
 import { provenance } from "./provenance.js";
 import { setupOf } from "./setup.js";
 import { claimedOf, undetermined } from "./undetermined.js";
@@ -42,13 +42,15 @@ async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions):
     ladderResult(ladder, scenario, unit, investigation.plan.authors, baseline === "subtracted"),
   );
   const ledger = ledgerOf(investigation.extras);
-  const judgement = judge(evidenceOf(claim, prepared, investigation, ladders, ledger));
+  const crossReading = crossReadingOf(investigation, prepared, claim);
+  const judgement = judge(evidenceOf(claim, prepared, investigation, ladders, ledger, crossReading));
   const { best } = investigation;
   return {
     file: claim.file,
     title: claim.title,
     ...judgement,
     claimed: claimedOf(claim.claimed),
+    crossReading,
     best: {
       value: best?.value ?? null,
       halfWidth: best?.halfWidth ?? null,
@@ -61,6 +63,17 @@ async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions):
     passages: passagesOf(investigation, unit.radians),
     provenance: provenance(claim, (performance.now() - began) / 1000),
   };
+}
+
+function crossReadingOf(
+  { extras }: Investigation,
+  { scenario }: Prepared,
+  { claimed: { unit } }: Claim,
+): ClaimResult["crossReading"] {
+  const reading = extras?.secondReading ?? null;
+  if (reading === null) return null;
+  const size = (unit.per === "orbit" ? 1 : unit.per / scenario.period) / unit.radians;
+  return { value: reading.perOrbit * size, halfWidth: reading.halfWidth * size };
 }
 
 function bestInWords(best: BestValue | null, unit: string): string {

@@ -13,6 +13,7 @@ export function evidenceOf(
   investigation: Investigation,
   ladders: readonly Ladder[],
   ledger: readonly LedgerEntry[],
+  crossReading: SolutionEvidence["crossReading"],
 ): Evidence {
   const { claimed } = claim;
   const { best } = investigation;
@@ -24,7 +25,7 @@ export function evidenceOf(
       unit: claimed.unit.text,
       baseline: claimed.baseline,
     },
-    solution: solutionEvidence(claim, investigation, ladders[0]!),
+    solution: solutionEvidence(claim, investigation, ladders[0]!, crossReading),
     best: best && { value: best.value, halfWidth: best.halfWidth, sound: best.sound },
     ladders,
     ledger,
@@ -38,6 +39,7 @@ function solutionEvidence(
   claim: Claim,
   { plan, solution, ladders, best }: Investigation,
   ladder: Ladder,
+  crossReading: SolutionEvidence["crossReading"],
 ): SolutionEvidence | null {
   if (solution === null || plan.authors === null) return null;
   const { method } = solution.runs;
@@ -60,6 +62,7 @@ function solutionEvidence(
     value: figure,
     rounding: solution.rounding,
     readingOff: Math.hypot(ofRun, ofNull),
+    crossReading,
   };
 }
 

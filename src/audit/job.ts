@@ -34,7 +34,7 @@ export type Task = { readonly step: number } & (
   /** The conserved quantities over the span. */
   | { readonly kind: "ledger" }
   /** The drift of the eccentricity vector, a second reading of the advance. */
-  | { readonly kind: "second-reading"; readonly effect: "on" | "off" }
+  | { readonly kind: "second-reading" }
 );
 
 /** What a run of the span gave, SI. */

@@ -69,15 +69,31 @@ function runTask(job: Job, loop: StepLoop, task: Task): Outcome {
         entries: runLedger(loop, scenario, scenario.parameters, task.step, run, watched),
       };
     }
-    case "second-reading": {
-      const drift = eccentricityDrift(loop, scenario, parametersOf(scenario, task.effect), task.step);
-      return {
-        kind: "second-reading",
-        perOrbit: drift?.perOrbit ?? null,
-        halfWidth: drift?.halfWidth ?? null,
-      };
-    }
+    case "second-reading":
+      return { kind: "second-reading", ...secondReading(loop, scenario, task.step) };
   }
+}
+
+/**
+ * The drift of the eccentricity vector an orbit, rad. In time an orbit is the osculating period; what a radial
+ * period differs from it widens the reading. In the angle it is the radial period of the run itself, which a
+ * strong field makes much longer than a turn.
+ */
+function secondReading(
+  loop: StepLoop,
+  scenario: PreparedScenario,
+  step: number,
+): { readonly perOrbit: number | null; readonly halfWidth: number | null } {
+  const none = { perOrbit: null, halfWidth: null };
+  // The vector turns in the plane of the start; an apsis counted from the node does not.
+  if (scenario.apsidalAngle === "from-node") return none;
+  const advance = apsidalAdvance(runPassages(loop, scenario, scenario.parameters, step));
+  if (advance === null) return none;
+  const orbit = scenario.apsidalAngle === "polar" ? advance.radialPeriod : scenario.period;
+  const drift = eccentricityDrift(loop, scenario, scenario.parameters, step, orbit);
+  if (drift === null) return none;
+  const stretch = Math.abs(drift.perOrbit * (advance.radialPeriod / orbit - 1));
+  return { perOrbit: drift.perOrbit, halfWidth: drift.halfWidth + stretch };
 }
 
 function parametersOf(scenario: PreparedScenario, effect: "on" | "off"): readonly number[] {

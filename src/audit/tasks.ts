@@ -92,7 +92,7 @@ export function planTasks(
     const step = ladder.steps[ensembleRung]!;
     add({ in: "ledger", halved: false }, { kind: "ledger", step }, 2 * spanCost(step));
     add({ in: "ledger", halved: true }, { kind: "ledger", step: step / 2 }, 4 * spanCost(step));
-    add({ in: "second-reading" }, { kind: "second-reading", step, effect: "on" }, spanCost(step));
+    add({ in: "second-reading" }, { kind: "second-reading", step }, 2 * spanCost(step));
   }
   return tasks;
 }

@@ -21,6 +21,7 @@ export function undetermined(
     gradeRule: "Nothing was run, so there is nothing to grade.",
     claimed: claim && claimedOf(claim.claimed),
     asSolved: { value: null, null: null, error: null, halfWidth: null },
+    crossReading: null,
     best: { value: null, halfWidth: null, from: null, says: "Nothing was run." },
     checks: [
       { name: "reproduces", outcome: "not-checked", figure: null, limit: null, unit: "", says: reason },

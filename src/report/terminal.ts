@@ -85,7 +85,7 @@ function heading(result: ClaimResult, width: number, paint: Paint): string[] {
   ];
 }
 
-function figures({ claimed, asSolved, best, setup }: ClaimResult, width: number): string[] {
+function figures({ claimed, asSolved, crossReading, best, setup }: ClaimResult, width: number): string[] {
   if (claimed === null) return [];
   const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
   const number = (value: number | null): string => (value === null ? "none" : figure(value, fine));
@@ -98,6 +98,16 @@ function figures({ claimed, asSolved, best, setup }: ClaimResult, width: number)
     ["claimed", String(claimed.value), `± ${size(claimed.halfWidth)}`, `${claimed.unit}, ${baseline}`],
     ["as solved", number(asSolved.value), "", how],
     ["null run", number(asSolved.null), "", "the same with the effect switched off"],
+    ...(crossReading === null
+      ? []
+      : [
+          [
+            "by the vector",
+            figure(crossReading.value, crossReading.halfWidth / 100),
+            `± ${size(crossReading.halfWidth)}`,
+            "drift of the eccentricity vector, end less start",
+          ] as [string, string, string, string],
+        ]),
     [
       "best value",
       best.value === null ? "none" : figure(best.value, best.halfWidth ?? 0),

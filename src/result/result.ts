@@ -72,6 +72,11 @@ export interface ClaimResult {
     /** Half-width of `error`. */
     readonly halfWidth: number | null;
   };
+  /**
+   * A second reading of the author's run, raw: the mean drift of the osculating eccentricity vector, end less
+   * start. Null where there is none to compare, as for an orbit whose apsis is counted from a moving node.
+   */
+  readonly crossReading: { readonly value: number; readonly halfWidth: number } | null;
   readonly best: {
     readonly value: number | null;
     readonly halfWidth: number | null;

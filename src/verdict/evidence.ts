@@ -51,6 +51,8 @@ export interface SolutionEvidence {
   readonly value: number | null;
   readonly rounding: number;
   readonly readingOff: number;
+  /** The raw figure read a second way, without passages or a fit; null where there is none. */
+  readonly crossReading: { readonly value: number; readonly halfWidth: number } | null;
 }
 
 /** The numerical error of the author's solution against the best value. */

@@ -23,6 +23,9 @@ describe("leapfrog on a Kepler orbit, e = 0.3, 100 orbits", () => {
     expect(Math.abs(result.ladders[0]!.figureOrder! - 2)).toBeLessThan(0.02);
   });
 
+  it("reads -429.4 from the eccentricity vector, end less start", () =>
+    expect(result.crossReading!.value).toBeCloseTo(-429.4, 1));
+
   it("keeps angular momentum to 1e-13 and the energy within 1e-3, and turns it all the same", () => {
     const entry = (name: string) => result.ledger.find(({ quantity }) => quantity === name)!;
     expect(entry("angular-momentum").largest).toBeLessThan(1e-13);

@@ -153,6 +153,13 @@ describe("checks", () => {
     expect(outcome({ solution: { value: 42.98044 + 0.00168 } }, "carries-digits")).toBe("fail");
   });
 
+  it("agrees: with caution where the eccentricity vector reads the run differently", () => {
+    const reading = (value: number) => ({ solution: { crossReading: { value, halfWidth: 0.1 } } });
+    expect(outcome(reading(62.1), "agrees")).toBe("pass");
+    expect(outcome(reading(62.2), "agrees")).toBe("caution");
+    expect(judge(evidence(reading(62.2))).grade).toBe("B");
+  });
+
   it("sampling: not checked without stored data", () => {
     expect(outcome({}, "sampling")).toBe("not-checked");
   });

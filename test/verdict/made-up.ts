@@ -38,6 +38,7 @@ export function evidence(
             value: 42.9804,
             rounding: 1e-7,
             readingOff: 0,
+            crossReading: null,
             ...changes.solution,
           },
     best: changes.best === null ? null : { value: 42.98044, halfWidth: 1e-6, sound: true, ...changes.best },

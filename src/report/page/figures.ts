@@ -21,7 +21,13 @@ function asWritten({ text, value }: NonNullable<ClaimResult["claimed"]>): string
 }
 
 /** The claimed and recomputed figures, all in the claim's unit. */
-export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): readonly FigureRow[] {
+export function figureRows({
+  claimed,
+  asSolved,
+  crossReading,
+  best,
+  setup,
+}: ClaimResult): readonly FigureRow[] {
   if (claimed === null) return [];
   const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
   const number = (value: number | null): string => {
@@ -60,6 +66,16 @@ export function figureRows({ claimed, asSolved, best, setup }: ClaimResult): rea
       null,
       setup?.method ? "the same method and step, the effect switched off" : NO_SOLUTION,
     ),
+    ...(crossReading === null
+      ? []
+      : [
+          row(
+            "by the vector",
+            typeset(figure(crossReading.value, crossReading.halfWidth / 100)),
+            crossReading.halfWidth,
+            "a second reading of the run: drift of the eccentricity vector, end less start",
+          ),
+        ]),
     row(
       "best value",
       best.value === null
