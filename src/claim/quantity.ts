@@ -1,4 +1,4 @@
-import type Fraction from "fraction.js";
+import Fraction from "fraction.js";
 import { exactDecimal } from "../formula/decimal.js";
 import { nearestDouble } from "../formula/nearest-double.js";
 import { nearest } from "./nearest.js";
@@ -7,7 +7,7 @@ import { NO_UNIT, parseUnit, sameDimension, type Unit, unitsCatalog } from "./un
 
 /** A number with its unit, as read. */
 export interface Quantity {
-  /** In SI: the double nearest to the exact product, where no π is in it. */
+  /** In SI: the double nearest to the exact product of number and unit. */
   readonly value: number;
   /** As written, and its size in SI. */
   readonly unit: string;
@@ -20,16 +20,26 @@ export interface Misreading {
   readonly wanted: string;
 }
 
-const NUMBER = /^\s*([+\-−]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(.*?)\s*$/su;
-/** Decimal exponents beyond this are not quantities of any orbit; a double ends at 308. */
+const NUMBER = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*([^\s\d].*)?$/su;
+/** A quantity is a number and a unit; what is longer is no such thing and need not be looked at. */
+const LONGEST = 100;
+/** Sizes beyond 10^60 either way are not of any orbit, in any unit; squares and cubes of them are still doubles. */
 const LARGEST_EXPONENT = 60;
+const LARGEST = new Fraction(10).pow(LARGEST_EXPONENT)!;
+
+/** The text of a quantity, tidied: one space for many, a hyphen for the minus sign; null when far too long. */
+export function tidied(input: string): string | null {
+  const text = input.trim();
+  return text.length > LONGEST ? null : text.replaceAll(/\s+/gu, " ").replaceAll("−", "-");
+}
 
 /** A decimal as an exact fraction; null when it is too large or too small to mean anything. */
 export function sensibleDecimal(text: string): Fraction | null {
-  const plain = text.replace("−", "-");
-  const exponent = Number(/[eE]([+-]?\d+)$/.exec(plain)?.[1] ?? 0);
-  if (Math.abs(exponent) > LARGEST_EXPONENT || plain.length > 100) return null;
-  return exactDecimal(plain);
+  const exponent = Number(/[eE]([+-]?\d+)$/.exec(text)?.[1] ?? 0);
+  if (Math.abs(exponent) > LARGEST_EXPONENT + LONGEST) return null;
+  const value = exactDecimal(text);
+  const size = value.abs();
+  return size.equals(0) || (size.lte(LARGEST) && size.gte(LARGEST.inverse())) ? value : null;
 }
 
 /**
@@ -37,12 +47,11 @@ export function sensibleDecimal(text: string): Fraction | null {
  *
  * @param wanted the SI unit whose dimension it must have, `1` for a pure number
  */
-export function parseQuantity(input: unknown, wanted: string): Quantity | Misreading {
+export function parseQuantity(input: string | number, wanted: string): Quantity | Misreading {
   const target = wanted === "1" ? NO_UNIT : (parseUnit(wanted) as Unit);
   const example = wanted === "1" ? "a plain number" : `a number with a unit, such as '1 ${wanted}'`;
-  if (typeof input !== "string" && typeof input !== "number") return { found: echo(input), wanted: example };
-  const [, number, unitText] = NUMBER.exec(String(input)) ?? [];
-  if (number === undefined || unitText === undefined) return { found: echo(input), wanted: example };
+  const [, number, unitText = ""] = NUMBER.exec(tidied(String(input)) ?? "") ?? [];
+  if (number === undefined) return { found: echo(input), wanted: example };
   const unit = unitText === "" ? NO_UNIT : parseUnit(unitText);
   if ("unknown" in unit) {
     const near = nearest(unit.unknown, unitsOf(target));
@@ -65,11 +74,10 @@ export function parseQuantity(input: unknown, wanted: string): Quantity | Misrea
   const exact = sensibleDecimal(number);
   if (exact === null)
     return { found: echo(input), wanted: `a size between 1e-${LARGEST_EXPONENT} and 1e${LARGEST_EXPONENT}` };
-  const pi = Math.PI ** unit.pi;
   return {
-    value: nearestDouble(exact.mul(unit.size)) * pi,
+    value: nearestDouble(exact.mul(unit.size)),
     unit: unitText,
-    unitSize: nearestDouble(unit.size) * pi,
+    unitSize: nearestDouble(unit.size),
   };
 }
 

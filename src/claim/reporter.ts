@@ -37,7 +37,7 @@ export class Reporter {
   /** Reads a quantity; null, with a problem noted, when it cannot be read or is not as it must be. */
   quantity(
     path: Path,
-    input: unknown,
+    input: string | number,
     unit: string,
     range: { readonly accepts: (value: number) => boolean; readonly wanted: string } = ANY,
   ): Quantity | null {

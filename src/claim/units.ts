@@ -8,10 +8,8 @@ export interface Dimension {
 }
 
 export interface Unit {
-  /** Size in SI; exact but for angles, whose size is an exact multiple of π rad over `perPi`. */
+  /** Size in SI: exact, but for the 60 digits of π in an angle. */
   readonly size: Fraction;
-  /** Power of π in the size. */
-  readonly pi: number;
   readonly dimension: Dimension;
 }
 
@@ -27,17 +25,16 @@ const JULIAN = "IAU Style Manual (1989), 5.15: the Julian year of 365.25 d";
 
 const length = (size: string | number): Unit => ({
   size: new Fraction(size),
-  pi: 0,
   dimension: { length: 1, time: 0, angle: 0 },
 });
 const time = (size: string | number): Unit => ({
   size: new Fraction(size),
-  pi: 0,
   dimension: { length: 0, time: 1, angle: 0 },
 });
+/** Far more digits than a double's 17, so that products still round as those of π itself. */
+const PI = new Fraction("3.14159265358979323846264338327950288419716939937510582097494");
 const partOfPi = (size: string): Unit => ({
-  size: new Fraction(size),
-  pi: 1,
+  size: PI.mul(size),
   dimension: { length: 0, time: 0, angle: 1 },
 });
 
@@ -63,7 +60,7 @@ export const unitsCatalog: readonly NamedUnit[] = [
     name: "rad",
     meaning: "radian",
     source: SI_BROCHURE,
-    unit: { size: new Fraction(1), pi: 0, dimension: { length: 0, time: 0, angle: 1 } },
+    unit: { size: new Fraction(1), dimension: { length: 0, time: 0, angle: 1 } },
   },
   { name: "deg", meaning: "degree", source: `${SI_BROCHURE}, table 8`, unit: partOfPi("1/180") },
   { name: "arcmin", meaning: "minute of arc", source: `${SI_BROCHURE}, table 8`, unit: partOfPi("1/10800") },
@@ -90,7 +87,7 @@ export function namedUnit(name: string): Unit | undefined {
   return unitsCatalog.find((unit) => unit.name === spelling)?.unit;
 }
 
-export const NO_UNIT: Unit = { size: new Fraction(1), pi: 0, dimension: { length: 0, time: 0, angle: 0 } };
+export const NO_UNIT: Unit = { size: new Fraction(1), dimension: { length: 0, time: 0, angle: 0 } };
 
 const FACTOR = /^([\p{L}]+|1)(?:\^([+-]?\d))?$/u;
 
@@ -121,7 +118,6 @@ function times(unit: Unit, factor: Unit, exponent: number): Unit {
   const { length: l, time: t, angle: a } = factor.dimension;
   return {
     size: unit.size.mul(factor.size.pow(exponent)!),
-    pi: unit.pi + factor.pi * exponent,
     dimension: {
       length: unit.dimension.length + l * exponent,
       time: unit.dimension.time + t * exponent,
