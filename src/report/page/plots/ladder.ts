@@ -25,6 +25,8 @@ interface Scene {
   readonly third: number;
   /** Half-width of the best value. */
   readonly bound: number | null;
+  /** Without a best value the heights are changes from rung to rung. */
+  readonly isChange: boolean;
 }
 
 /** Distance from the best value against steps an orbit, for the author's method and, quietly, the witnesses. */
@@ -32,7 +34,7 @@ export function ladderPlot(canvas: Canvas, result: ClaimResult): string | null {
   const scene = sceneOf(result);
   if (scene === null) return null;
   const { own, authors, x, y, lines } = scene;
-  const isChange = result.best.value === null;
+  const { isChange } = scene;
   const what = isChange ? "Change from rung to rung" : "Distance from the best value";
   const unit = result.claimed!.unit;
   return draw(canvas, {
@@ -90,6 +92,7 @@ function sceneOf({ ladders, best, claimed }: ClaimResult): Scene | null {
     y: [Math.min(...heights) / 2.5, Math.max(...heights) * 2.5],
     third,
     bound: best.value === null ? null : best.halfWidth,
+    isChange: best.value === null,
   };
 }
 
@@ -137,11 +140,13 @@ function markLine(plot: Plot, { points, isOwn }: Line) {
 }
 
 /** The fitted law, beyond its window by one rung each way, where it shows from under the line that it fits. */
-function lawOf({ own, y }: Scene): readonly Point[] {
+function lawOf({ own, y, isChange }: Scene): readonly Point[] {
   if (own === null) return [];
   const { coefficient, figureOrder: order, window, rungs } = own;
   if (coefficient === null || order === null || window === null) return [];
-  const at = (n: number): Point => ({ n, distance: Math.abs(coefficient) * n ** -order });
+  // What is left at half the step has not changed yet.
+  const share = isChange ? 1 - 2 ** -order : 1;
+  const at = (n: number): Point => ({ n, distance: share * Math.abs(coefficient) * n ** -order });
   return rungs
     .slice(Math.max(0, window[0] - 1), window[1] + 2)
     .map(({ stepsPerOrbit }) => at(stepsPerOrbit))
