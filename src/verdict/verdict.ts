@@ -2,6 +2,7 @@ import type { Check, CheckName } from "../result/result.js";
 import { bestInWords, ENDINGS, plural, size, steps } from "../result/words.js";
 import { standingDigits } from "./digits.js";
 import { type Conclusion, type Evidence, type SolutionError, solutionError } from "./evidence.js";
+import { remedy } from "./remedy.js";
 
 /** A verdict of resolved asks for each of these. */
 const NEEDED: readonly CheckName[] = ["converges", "order", "agrees", "stands-clear"];
@@ -49,13 +50,17 @@ function undetermined(evidence: Evidence, outcome: Lookup): Conclusion | null {
 }
 
 /** For a claim without a solution: whether the figure is right, and what would have carried it. */
-function textOnly({ claimed, best }: Decidable): string {
+function textOnly(evidence: Decidable): string {
+  const { claimed, best } = evidence;
   const distance = Math.abs(claimed.value - best.value);
   const value = `${bestInWords(best, claimed)} ${claimed.unit}`;
   const right = distance <= claimed.halfWidth + best.halfWidth;
+  const option = remedy(evidence)?.options[0];
+  const carried =
+    option === undefined ? "" : ` ${option.method} at ${steps(option.stepsPerOrbit)} would carry its digits.`;
   return right
-    ? `The figure is right, the equations give ${value}; but the claim does not say how it was computed, so nothing shows that the solution carries it.`
-    : `The figure is off by ${size(distance)}, the equations give ${value}; the claim does not say how it was computed, so nothing shows why.`;
+    ? `The figure is right, the equations give ${value}; but the claim does not say how it was computed, so nothing shows that the solution carries it.${carried}`
+    : `The figure is off by ${size(distance)}, the equations give ${value}; the claim does not say how it was computed, so nothing shows why.${carried}`;
 }
 
 function decide(evidence: Decidable, outcome: Lookup, error: SolutionError | null): Conclusion {
@@ -89,7 +94,7 @@ function decide(evidence: Decidable, outcome: Lookup, error: SolutionError | nul
   ) {
     return {
       verdict: "resolved",
-      reason: `All ${plural(claimed.digits, "quoted digit")} stand: the numerical error of ${how} is at most ${size(error.bound)} ${unit}, and a third of the quoted margin is ${size(third)}.`,
+      reason: `${allDigits(claimed.digits)}: the numerical error of ${how} is at most ${size(error.bound)} ${unit}, and a third of the quoted margin is ${size(third)}.`,
     };
   }
   const digits = digitsLeft(evidence, error.bound, distance);
@@ -98,6 +103,13 @@ function decide(evidence: Decidable, outcome: Lookup, error: SolutionError | nul
   }
   return { verdict: "not-resolved", reason: lost(evidence, error, how, value) };
 }
+
+const allDigits = (count: number): string =>
+  count === 1
+    ? "The quoted digit stands"
+    : count === 2
+      ? "Both quoted digits stand"
+      : `All ${count} quoted digits stand`;
 
 /** Digits that stand; of a claim that contains zero, which has none to count, whether it holds at all. */
 function digitsLeft({ claimed, best }: Decidable, error: number, distance: number): number {
@@ -131,15 +143,18 @@ function partly(
 }
 
 function lost(
-  { claimed, solution, best }: Decidable,
+  { claimed, solution, best, nullExists }: Decidable,
   error: SolutionError,
   how: string,
   value: string,
 ): string {
-  const artefact = claimed.baseline === "included" ? solution.null : null;
+  const artefact = claimed.baseline === "included" && nullExists ? solution.null : null;
   // The null run tells the story where it accounts for most of the error.
   const tells = artefact !== null && Math.abs(artefact - error.value) <= Math.abs(error.value) / 2;
   const told = tells ? ` With the effect switched off it still shows ${size(artefact)}.` : "";
-  const at = best.value === 0 ? "the true figure is 0" : `the equations give ${value}`;
+  const at =
+    Math.abs(best.value) <= best.halfWidth
+      ? "the figure of the equations is 0"
+      : `the equations give ${value}`;
   return `The numerics make up too much of the figure: ${how} is off by ${size(error.value)} ${claimed.unit}, and ${at}.${told}`;
 }
