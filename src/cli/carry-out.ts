@@ -38,15 +38,11 @@ export async function carryOut(options: AuditOptions): Promise<void> {
     folder?.leave();
   };
   await interruptible(cleanUp, async () => {
-    try {
-      const files = await claimFiles(options.claims);
-      // What cannot be written is known before the long work is done.
-      if (options.json !== null && options.json !== "-") await tryWriting(options.json);
-      if (options.out !== null) folder = await ReportFolder.open(options.out, files);
-      await auditFiles(files, options, folder, progress);
-    } finally {
-      cleanUp();
-    }
+    const files = await claimFiles(options.claims);
+    // What cannot be written is known before the long work is done.
+    if (options.json !== null && options.json !== "-") await tryWriting(options.json, files);
+    if (options.out !== null) folder = await ReportFolder.open(options.out, files);
+    await auditFiles(files, options, folder, progress);
   });
 }
 

@@ -17,12 +17,22 @@ export async function writeTo(path: string, text: string): Promise<void> {
   await explained(path, writeWhole(await realpath(path).catch(() => path), text));
 }
 
-/** Finds out ahead of the work whether a file can be written; leaves nothing. @throws CallError */
-export async function tryWriting(path: string): Promise<void> {
+/**
+ * Finds out ahead of the work whether a file can be written; leaves nothing.
+ *
+ * @param spared files that are to be read, and must not be written over
+ * @throws CallError
+ */
+export async function tryWriting(path: string, spared: readonly string[] = []): Promise<void> {
   const about = await stat(path).catch(() => null);
   if (about?.isDirectory()) throw new CallError(`cannot write ${path}: it is a folder`);
   if (about !== null && !about.isFile()) return;
   const target = await realpath(path).catch(() => path);
+  for (const file of spared) {
+    if ((await realpath(file).catch(() => file)) === target) {
+      throw new CallError(`cannot write ${path}: it is one of the claims`);
+    }
+  }
   const trial = join(dirname(target), `.cupel-${randomUUID()}`);
   await explained(path, writeWhole(trial, ""), trial);
   rmSync(trial, { force: true });
@@ -35,9 +45,14 @@ export async function tryWriting(path: string): Promise<void> {
  * @throws CallError
  */
 export async function makeFolders(path: string, missing: readonly string[]): Promise<void> {
-  for (const folder of missing) await explained(path, mkdir(folder));
-  if (!(await stat(path)).isDirectory())
-    throw new CallError(`cannot write ${path}: it is a file, not a folder`);
+  for (const folder of missing) await explained(path, mkdir(folder).catch(unlessThere));
+  if ((await explained(path, stat(path))).isDirectory()) return;
+  throw new CallError(`cannot write ${path}: it is a file, not a folder`);
+}
+
+/** Another run may have made it in the meantime. */
+function unlessThere(error: NodeJS.ErrnoException): void {
+  if (error.code !== "EEXIST") throw error;
 }
 
 const REASONS: Readonly<Record<string, string>> = {

@@ -5,9 +5,9 @@ import { say } from "./output.js";
 const SIGNALS = ["SIGINT", "SIGTERM", "SIGHUP"] as const;
 
 /**
- * Does work that a signal may end: then cleans up and leaves at once, workers included.
+ * Does work that a signal may end: the process then leaves at once, workers included.
  *
- * @param cleanUp synchronous, so that nothing comes between it and the end
+ * @param cleanUp done however the work ends; synchronous, so that nothing comes between it and the end
  */
 export async function interruptible(cleanUp: () => void, work: () => Promise<void>): Promise<void> {
   const stop = (signal: (typeof SIGNALS)[number]): void => {
@@ -16,9 +16,12 @@ export async function interruptible(cleanUp: () => void, work: () => Promise<voi
     process.exit(EXIT.signal + constants.signals[signal]);
   };
   for (const signal of SIGNALS) process.once(signal, stop);
+  process.once("exit", cleanUp);
   try {
     await work();
   } finally {
+    cleanUp();
+    process.off("exit", cleanUp);
     for (const signal of SIGNALS) process.off(signal, stop);
   }
 }

@@ -4,5 +4,8 @@ import { tameStreams } from "./output.js";
 import { run } from "./program.js";
 
 tameStreams();
-process.on("uncaughtException", tellFailure);
+process.on("uncaughtException", (error) => {
+  tellFailure(error);
+  process.exit();
+});
 await run(process.argv.slice(2)).catch(tellFailure);

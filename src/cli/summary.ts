@@ -23,7 +23,7 @@ export function summarize(
   { quiet, colour }: SummaryStyle,
 ): string {
   const { stdout } = process;
-  const columns = stdout.isTTY ? Math.max(NARROWEST, stdout.columns) : WIDEST;
+  const columns = stdout.isTTY ? Math.max(NARROWEST, stdout.columns || WIDEST) : WIDEST;
   const look = {
     width: Math.min(WIDEST, columns),
     colour: colour === "auto" ? mayColour(stdout) : colour === "always",

@@ -123,6 +123,7 @@ describe("a place that cannot be written", () => {
     [["--json", "/proc/result.json"], "cannot write /proc/result.json: "],
     [["--json", "none/result.json"], "cannot write none/result.json: the folder does not exist"],
     [["--json", "."], "cannot write .: it is a folder"],
+    [["--json", "./slow.yaml"], "cannot write ./slow.yaml: it is one of the claims"],
     [["--out", "quick.yaml"], "cannot write quick.yaml: it is a file"],
     [["--out", "quick.yaml/pages/deep"], "cannot write quick.yaml/pages/deep: part of the path is a file"],
     [["--out", "/proc/cupel/pages"], "cannot write /proc/cupel/pages: "],
