@@ -50,8 +50,9 @@ export const audit: Command = {
               describe: "Claim files, or globs in quotes",
             })
             .options(options),
-        async ({ claims, workers, out, json, quiet, colour, ...given }) => {
-          if (claims === undefined || claims.length === 0) {
+        async ({ claims: named = [], _: afterDashes, workers, out, json, quiet, colour, ...given }) => {
+          const claims = [...named, ...afterDashes.map(String)];
+          if (claims.length === 0) {
             throw new CallError("found no claim to audit; wanted files or globs");
           }
           if (out === "") throw new CallError("--out: found nothing; wanted a folder");

@@ -71,6 +71,12 @@ describe("an audit", () => {
     expect(await figures("1")).toEqual(await figures("3"));
   });
 
+  it("takes a name with a leading dash after --", async () => {
+    put("-odd.yaml", claim());
+    const { code, stdout } = await cupel(["audit", "--quiet", "--no-report", "--", "-odd.yaml"], { cwd });
+    expect([code, stdout]).toEqual([0, expect.stringMatching(/ -odd\.yaml\n$/)]);
+  });
+
   it("audits the readable claims beside one that is not, and leaves with 2", async () => {
     put("bad.yaml", claim({ span: "0 orbits" }));
     const { code, stdout, stderr } = await cupel(["audit", "*.yaml"], { cwd });
