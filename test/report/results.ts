@@ -39,7 +39,6 @@ export function bare(result: ClaimResult): ClaimResult {
     digits: null,
     asSolved: { value: null, null: null, error: null, halfWidth: null },
     crossReading: null,
-    crossReading: null,
     best: { value: null, halfWidth: null, from: null, says: "No witness's ladder bounds the figure." },
     budget: null,
     ladders: [],
