@@ -20,7 +20,7 @@ export interface Misreading {
   readonly wanted: string;
 }
 
-const NUMBER = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*([^\s\d].*)?$/su;
+const NUMBER = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)(?: ?(\p{L}.*)| (1 ?\/.*))?$/u;
 /** A quantity is a number and a unit; what is longer is no such thing and need not be looked at. */
 const LONGEST = 100;
 /** Sizes beyond 10^60 either way are not of any orbit, in any unit; squares and cubes of them are still doubles. */
@@ -50,7 +50,8 @@ export function sensibleDecimal(text: string): Fraction | null {
 export function parseQuantity(input: string | number, wanted: string): Quantity | Misreading {
   const target = wanted === "1" ? NO_UNIT : (parseUnit(wanted) as Unit);
   const example = wanted === "1" ? "a plain number" : `a number with a unit, such as '1 ${wanted}'`;
-  const [, number, unitText = ""] = NUMBER.exec(tidied(String(input)) ?? "") ?? [];
+  const [, number, named, inverse] = NUMBER.exec(tidied(String(input)) ?? "") ?? [];
+  const unitText = named ?? inverse ?? "";
   if (number === undefined) return { found: echo(input), wanted: example };
   const unit = unitText === "" ? NO_UNIT : parseUnit(unitText);
   if ("unknown" in unit) {

@@ -6,8 +6,7 @@ import { parseDocument } from "./document.js";
 import { takeLaterParts } from "./later.js";
 import type { Problem } from "./problem.js";
 import { Reporter } from "./reporter.js";
-import { claimSchema } from "./schema.js";
-import { shapeProblems } from "./shape.js";
+import { shapeOf } from "./shape.js";
 
 /** A claim, or all that is wrong with its file. */
 export type ReadOutcome =
@@ -96,18 +95,8 @@ export function parseClaim(bytes: Uint8Array, file: string): ReadOutcome {
   const { document } = parsed;
   const report = new Reporter(document, file);
   for (const part of takeLaterParts(document.data)) report.atKey(part.path, part);
-  const shaped = claimSchema.safeParse(document.data);
-  if (!shaped.success) {
-    const missing = withoutLater(shapeProblems(shaped.error.issues, document, file), report.problems);
-    return fail([...report.problems, ...missing]);
-  }
-  const claim = buildClaim(shaped.data, { file, sha256 }, report);
-  return claim === null || report.problems.length > 0 ? fail(report.problems) : { ok: true, claim };
-}
-
-/** What was taken out for a later version is then missing: one message is enough. */
-function withoutLater(problems: readonly Problem[], later: readonly Problem[]): Problem[] {
-  return problems.filter(({ path }) => !later.some((part) => part.path === path));
+  const claim = buildClaim(shapeOf(document, report), { file, sha256 }, report);
+  return claim === null ? fail(report.problems) : { ok: true, claim };
 }
 
 function inOrder(problems: readonly Problem[]): Problem[] {

@@ -24,8 +24,21 @@ export class Reporter {
     this.#add(path, this.#document.placeOfKey(path), found, wanted);
   }
 
+  /** A key that must be there; told at the block that it is missing from. */
   missing(path: Path, wanted: string): void {
     this.#add(path, this.#document.place(path), "nothing", wanted);
+  }
+
+  /** Whether a problem has been told of this very part. */
+  isTold(path: Path): boolean {
+    return this.problems.some((problem) => problem.path === path.join("."));
+  }
+
+  /** The same of this part or anything in it. */
+  isToldWithin(path: Path): boolean {
+    return (
+      this.isTold(path) || this.problems.some((problem) => problem.path.startsWith(`${path.join(".")}.`))
+    );
   }
 
   unknownKey(path: Path, known: readonly string[]): void {
@@ -35,12 +48,7 @@ export class Reporter {
   }
 
   /** Reads a quantity; null, with a problem noted, when it cannot be read or is not as it must be. */
-  quantity(
-    path: Path,
-    input: string | number,
-    unit: string,
-    range: { readonly accepts: (value: number) => boolean; readonly wanted: string } = ANY,
-  ): Quantity | null {
+  quantity(path: Path, input: string | number, unit: string, range: Range = ANY): Quantity | null {
     const read = parseQuantity(input, unit);
     if ("found" in read) {
       this.at(path, read);
@@ -63,5 +71,11 @@ export class Reporter {
   }
 }
 
-const ANY = { accepts: () => true, wanted: "a number" };
-export const POSITIVE = { accepts: (value: number) => value > 0, wanted: "more than zero" };
+/** What a value may be, and how to say so. */
+export interface Range {
+  readonly accepts: (value: number) => boolean;
+  readonly wanted: string;
+}
+
+const ANY: Range = { accepts: () => true, wanted: "a number" };
+export const POSITIVE: Range = { accepts: (value) => value > 0, wanted: "more than zero" };

@@ -1,26 +1,39 @@
 import { z } from "zod";
 import { equationsCatalog } from "../equations/catalog/index.js";
 import { methodsCatalog } from "../methods/catalog/index.js";
+import { anyParameters, anyVariables } from "./catalog-keys.js";
 
 const names = (catalog: readonly { readonly name: string }[]) =>
   catalog.map(({ name }) => name) as [string, ...string[]];
 const method = z.enum(names(methodsCatalog));
-const dimensional = (what: string) => z.string().meta({ description: what });
+/** A quantity is a text; how one looks is told to editors, and to those who forget the unit. */
+const dimensional = (description: string, ...examples: string[]) =>
+  z.string().meta({ description, examples });
 
 const start = z
   .strictObject({
-    periapsis: dimensional("Least distance, with unit; with apoapsis. Osculating and Newtonian.").optional(),
-    apoapsis: dimensional("Greatest distance, with unit; with periapsis.").optional(),
-    "semi-major-axis": dimensional("With unit; with eccentricity. Osculating and Newtonian.").optional(),
+    periapsis: dimensional(
+      "Least distance, with unit; with apoapsis. Osculating and Newtonian.",
+      "0.21 au",
+    ).optional(),
+    apoapsis: dimensional("Greatest distance, with unit; with periapsis.", "0.34 au").optional(),
+    "semi-major-axis": dimensional(
+      "With unit; with eccentricity. Osculating and Newtonian.",
+      "0.28 au",
+    ).optional(),
     eccentricity: z
       .number()
       .meta({ description: "More than 0 and less than 1; with semi-major-axis." })
       .optional(),
-    inclination: dimensional("Against the xy plane, an angle; 0 when left out.").optional(),
-    node: dimensional("Longitude of the ascending node, an angle; 0 when left out.").optional(),
-    "argument-of-periapsis": dimensional("From the node, an angle; 0 when left out.").optional(),
+    inclination: dimensional(
+      "Against the xy plane, an angle from 0 to 180 deg; 0 when left out.",
+      "28 deg",
+    ).optional(),
+    node: dimensional("Longitude of the ascending node, an angle; 0 when left out.", "40 deg").optional(),
+    "argument-of-periapsis": dimensional("From the node, an angle; 0 when left out.", "75 deg").optional(),
     "true-anomaly": dimensional(
       "Where on the orbit the start is, an angle from periapsis; 0 when left out.",
+      "180 deg",
     ).optional(),
     "turning-points": z
       .boolean()
@@ -29,8 +42,7 @@ const start = z
           "True: periapsis and apoapsis are the exact turning points under the equations themselves.",
       })
       .optional(),
-    state: z
-      .record(z.string(), z.string())
+    state: anyVariables
       .meta({ description: "Instead of elements: the equations' own variables, each with its unit." })
       .optional(),
   })
@@ -38,13 +50,21 @@ const start = z
     description: "The starting state: periapsis + apoapsis, or semi-major-axis + eccentricity, or state.",
   });
 
+/** A run of a single orbit takes minutes at that, and every step adds its rounding: nobody goes there. */
+const MOST_STEPS_PER_ORBIT = 1e9;
+
 const solution = z
   .strictObject({
     method: method.meta({ description: "The author's method, by its catalog name." }),
-    step: dimensional("The step: a time, or an angle for angle-form equations.").optional(),
+    step: dimensional(
+      "The step: a time, or an angle for angle-form equations.",
+      "0.1 d",
+      "0.5 deg",
+    ).optional(),
     "steps-per-orbit": z
       .number()
-      .positive()
+      .gt(1)
+      .max(MOST_STEPS_PER_ORBIT)
       .meta({ description: "Instead of step: the osculating Newtonian period in so many steps." })
       .optional(),
     arithmetic: z
@@ -59,22 +79,22 @@ const solution = z
   })
   .meta({ description: "How the author solved it; may be left out by someone who has only the text." });
 
+/** At least one character that is seen, and none that breaks the line, turns its direction or is half a pair. */
+const ONE_LINE =
+  /^(?=.*[^\s\p{C}])[^\p{Cc}\p{Cs}\u2028\u2029\u061c\u200e\u200f\u202a-\u202e\u2066-\u2069]+$/u;
+
 /** The claim file as it is written. */
 export const claimSchema = z
   .strictObject({
     cupel: z.literal("claim/1").meta({ description: "Format and version of this file." }),
-    title: z
-      .string()
-      .min(1)
-      .max(200)
-      .regex(/^[^\n\r]*$/)
-      .meta({ description: "One line for people." }),
+    title: z.string().max(200).regex(ONE_LINE).meta({ description: "One line for people." }),
     claimed: z
       .strictObject({
         quantity: z.enum(["apsidal-advance"]).meta({ description: "What the figure is." }),
         value: z.string().meta({
           description:
             "The figure as quoted, with unit: 104.41(2) arcsec/century, 12.1 ± 0.1 arcmin/orbit, or bare digits.",
+          examples: ["104.41(2) arcsec/century"],
         }),
         baseline: z
           .enum(["included", "subtracted"])
@@ -88,14 +108,14 @@ export const claimSchema = z
     scenario: z
       .strictObject({
         equations: z.enum(names(equationsCatalog)).meta({ description: "A catalog name of equations." }),
-        parameters: z
-          .record(z.string(), z.union([z.string(), z.number()]))
+        parameters: anyParameters
           .meta({ description: "Parameters of the equations, each with its unit." })
           .optional(),
         start,
-        span: z
-          .string()
-          .meta({ description: "'100 orbits', or a time, or an angle for angle-form equations." }),
+        span: z.string().meta({
+          description: "'100 orbits', or a time, or an angle for angle-form equations.",
+          examples: ["100 orbits"],
+        }),
       })
       .meta({ description: "What was integrated." }),
     solution: solution.optional(),
@@ -122,6 +142,14 @@ export const claimSchema = z
   });
 
 export type RawClaim = z.infer<typeof claimSchema>;
+
+/** A claim of which some parts were wrong and have been taken out. */
+export type PartialClaim = Part<RawClaim>;
+type Part<T> = T extends readonly unknown[]
+  ? T
+  : T extends object
+    ? { [K in keyof T]?: Part<T[K]> | undefined }
+    : T;
 
 /** The JSON Schema (draft 2020-12) of claim files, for editors. */
 export function claimJsonSchema(): object {

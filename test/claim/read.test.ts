@@ -70,7 +70,7 @@ const replaced: readonly (readonly [string, string, number, number, RegExp, RegE
   ["GM: 1.1e20 m^3/s^2", "GM: 0 m^3/s^2", 10, 21, /0 m\^3/, /more than zero/],
   ["GM: 1.1e20 m^3/s^2", "GM: -1e20 m^3/s^2", 10, 21, /-1e20/, /more than zero/],
   ["GM: 1.1e20 m^3/s^2", "GN: 1.1e20 m^3/s^2", 10, 17, /unknown key 'GN'/, /'GM'\?/],
-  ["periapsis: 0.21 au", "periapsis: .nan", 11, 23, /NaN/, /unit/],
+  ["periapsis: 0.21 au", "periapsis: .nan", 11, 23, /'.nan'/, /unit/],
   ["periapsis: 0.21 au", "periapsis: 0.21", 11, 23, /0.21/, /unit/],
   ["apoapsis: 0.34 au", "apoapsis: 0.20 au", 11, 42, /0.20 au/, /more than the periapsis/],
   ["apoapsis: 0.34 au", "eccentricity: 0.2", 11, 10, /periapsis \+ eccentricity/, /periapsis \+ apoapsis/],
