@@ -1,10 +1,11 @@
 import type { Claim } from "../claim/claim.js";
 import { type BestValue, chooseBest, type MethodEstimate } from "../convergence/best.js";
 import { nominalLength } from "../measure/limits.js";
+import type { MethodDefinition } from "../methods/definition.js";
 import { type ExecuteOptions, execute } from "./execute.js";
 import { type Extras, gather } from "./gather.js";
 import { type AnalysedLadder, analyse } from "./ladders.js";
-import { type LadderPlan, planLadder } from "./plan.js";
+import { type LadderPlan, planLadder, rungsWorthRunning } from "./plan.js";
 import type { JobPool } from "./pool.js";
 import type { Prepared } from "./prepare.js";
 import { costPerStep, planTasks } from "./tasks.js";
@@ -48,9 +49,14 @@ export async function investigate(
     };
   }
   const plan = planLadder(authorsStep, scenario.period, claim.audit.rungs, cost, AFFORDABLE);
-  const ensembleRung = plan.authors ?? Math.floor(plan.steps.length / 2);
+  const own = (method: MethodDefinition): { readonly ladder: LadderPlan; readonly ensembleRung: number } => {
+    const count = rungsWorthRunning(plan, method.order, scenario, claim.audit.rungs);
+    const ladder = method === authors ? plan : { ...plan, steps: plan.steps.slice(0, count) };
+    const centre = plan.authors ?? Math.floor(plan.steps.length / 2);
+    return { ladder, ensembleRung: Math.min(centre, ladder.steps.length - 1) };
+  };
   const tasks = methods.flatMap((method) =>
-    planTasks(method, scenario, plan, ensembleRung, {
+    planTasks(method, scenario, own(method).ladder, own(method).ensembleRung, {
       nullRuns: subtracted || method === authors,
       ledger: method === authors,
     }),
@@ -60,8 +66,8 @@ export async function investigate(
     gather(
       method,
       method === authors ? "solution" : "witness",
-      plan,
-      ensembleRung,
+      own(method).ladder,
+      own(method).ensembleRung,
       scenario.nullParameters === null,
       tasks,
       outcomes,

@@ -40,3 +40,26 @@ export function planLadder(
   for (let k = -coarser; k <= finer; k++) steps.push(step / 2 ** k);
   return { steps, authors: authorsStep === null ? null : coarser };
 }
+
+/**
+ * A method of order p brings the error of a figure to rounding, some 1e-14, at about 4 · 10^(14/p) steps to an
+ * orbit as tight as the periapsis; rungs beyond four times that show rounding alone.
+ */
+const DOWN_TO_ROUNDING = 16;
+
+/**
+ * Rungs of a witness's ladder: those that can show more than rounding, and at least `fewest`.
+ *
+ * @param order of the method
+ */
+export function rungsWorthRunning(
+  { steps }: LadderPlan,
+  order: number,
+  { period, eccentricity }: { readonly period: number; readonly eccentricity: number },
+  fewest: number,
+): number {
+  // By Kepler's third law the circle at the periapsis distance takes (1 - e)^(3/2) of the period.
+  const most = (DOWN_TO_ROUNDING * 10 ** (14 / order)) / (1 - eccentricity) ** 1.5;
+  const worth = steps.filter((step) => period / step <= most).length;
+  return Math.min(steps.length, Math.max(fewest, worth));
+}

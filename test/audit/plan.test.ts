@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { planLadder } from "../../src/audit/plan.js";
+import { planLadder, rungsWorthRunning } from "../../src/audit/plan.js";
 
 const free = () => 0;
 
@@ -31,5 +31,22 @@ describe("planLadder", () => {
     const plan = planLadder(null, 256, 8, free, 1);
     expect(plan.steps).toContain(1);
     expect(plan.authors).toBeNull();
+  });
+});
+
+describe("rungsWorthRunning", () => {
+  const plan = planLadder(1, 512, 8, free, 1);
+  const finest = (order: number, eccentricity: number) =>
+    512 / plan.steps[rungsWorthRunning(plan, order, { period: 512, eccentricity }, 8) - 1]!;
+
+  it("leaves out what would show rounding alone: the sooner the higher the order", () => {
+    expect(finest(4, 0.2)).toBe(8192);
+    expect(finest(6, 0.2)).toBe(4096);
+    expect(finest(8, 0.2)).toBe(2048);
+  });
+
+  it("keeps them where the periapsis is tight, and keeps the rungs asked for", () => {
+    expect(finest(8, 0.9)).toBe(8192);
+    expect(rungsWorthRunning(plan, 8, { period: 512, eccentricity: 0.01 }, 10)).toBe(10);
   });
 });
