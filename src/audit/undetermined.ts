@@ -1,5 +1,5 @@
 import type { Claim } from "../claim/claim.js";
-import { formatProblem } from "../claim/problem.js";
+import { problemInWords } from "../claim/problem.js";
 import type { ReadOutcome } from "../claim/read.js";
 import type { ClaimResult } from "../result/result.js";
 import { type Provenance, provenance } from "./provenance.js";
@@ -43,6 +43,8 @@ export function claimedOf(claimed: Claim["claimed"]): NonNullable<ClaimResult["c
 
 /** The entry of a file that holds no claim that can be read, with what is wrong with it. */
 export function unreadable({ file, problems, sha256 }: Extract<ReadOutcome, { ok: false }>): ClaimResult {
-  const reason = problems.map(formatProblem).join("; ");
+  const reason = problems
+    .map((problem) => (problem.line === null ? "" : `line ${problem.line}, `) + problemInWords(problem))
+    .join("; ");
   return undetermined(file, `The claim could not be read: ${reason}.`, { file, sha256 });
 }
