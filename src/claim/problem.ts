@@ -13,12 +13,12 @@ export interface Problem {
 /** One line: `file:line:column: path: found ..., wanted ...`. */
 export function formatProblem(problem: Problem): string {
   const { file, line, column } = problem;
-  return `${line === null ? file : `${file}:${line}:${column}`}: ${problemInWords(problem)}`;
+  return `${onOneLine(line === null ? file : `${file}:${line}:${column}`)}: ${problemInWords(problem)}`;
 }
 
 /** The same without the place. */
 export function problemInWords({ path, found, wanted }: Problem): string {
-  return `${path === "" ? "" : `${path}: `}found ${found}; wanted ${wanted}`;
+  return onOneLine(`${path === "" ? "" : `${path}: `}found ${found}; wanted ${wanted}`);
 }
 
 const LONGEST_ECHO = 60;
