@@ -1,5 +1,8 @@
 import { describe, expect, it } from "vitest";
 import { findEquations } from "../../src/equations/catalog/index.js";
+import { differentiate } from "../../src/formula/differentiate.js";
+import type { Node } from "../../src/formula/graph.js";
+import { evaluate } from "../../src/formula/walk.js";
 import { compileStepLoop } from "../../src/kernel/compile.js";
 import { conservedObservables } from "../../src/kernel/observables.js";
 import { compileSystem } from "../../src/kernel/system.js";
@@ -56,6 +59,39 @@ describe.each([0, 0.1, 0.25])("mass ratio %d", (nu) => {
       const order = Math.log2(slow / fast);
       expect(order).toBeGreaterThan(3.8);
       expect(order).toBeLessThan(4.2);
+    },
+  );
+
+  it.each(["energy", "angular-momentum"])(
+    "changes %s at every place at a rate of order c^-4 alone",
+    (name) => {
+      // dQ/dt = ∂Q/∂x · v + ∂Q/∂v · a, whose parts to order c^-2 cancel: what is left is c^-4 times one number.
+      const { compiled } = system(nu, 1);
+      const { graph, coordinates, rates, accelerations, conserved } = compiled;
+      const quantity = conserved.find((of) => of.name === name)!.components.at(-1)!;
+      const rate = (c: number, state: readonly number[]): number => {
+        const values: Record<string, number> = { GM, c, nu };
+        compiled.states.forEach((symbol, i) => {
+          values[symbol] = state[i]!;
+        });
+        const at = (node: Node): number => evaluate(node, (symbol) => values[symbol]!);
+        return coordinates.reduce(
+          (sum, x, i) =>
+            sum +
+            at(differentiate(graph, quantity, x)) * values[rates[i]!]! +
+            at(differentiate(graph, quantity, rates[i]!)) * at(accelerations[i]!),
+          0,
+        );
+      };
+      for (const state of [
+        [0.7, 0.2, -0.4, 1.1],
+        [-0.5, 0.9, -0.3, -0.8],
+        [1.2, -0.1, 0.6, 0.5],
+      ]) {
+        const [near, far] = [rate(10, state), rate(20, state)];
+        expect(Math.abs(near)).toBeGreaterThan(1e-6);
+        expect(near / far).toBeCloseTo(16, 4);
+      }
     },
   );
 
