@@ -1,6 +1,6 @@
 import { isMap, isScalar, isSeq, LineCounter, type Node, parseAllDocuments } from "yaml";
 import { outOfBounds } from "./bounds.js";
-import { type Fault, type ParsedYaml, syntaxFault, unwelcomeParts } from "./faults.js";
+import { type Fault, type ParsedYaml, syntaxFaults, unwelcomeParts } from "./faults.js";
 import type { Problem } from "./problem.js";
 
 /** A step into a document: a key of a map, or an index of a list. */
@@ -41,8 +41,7 @@ export function parseDocument(
   if (bounds !== null) return { ok: false, problems: [problem(bounds)] };
   const documents = parseAllDocuments(text, { prettyErrors: false, logLevel: "silent" });
   const [document, second] = documents as unknown as ParsedYaml[];
-  const faults = [...(document?.errors.map(syntaxFault) ?? [])];
-  if (document !== undefined) faults.push(...unwelcomeParts(document));
+  const faults = document === undefined ? [] : [...syntaxFaults(document), ...unwelcomeParts(document)];
   if (second !== undefined) {
     faults.push({ offset: second.range?.[0] ?? 0, found: "a second document", wanted: "one claim a file" });
   }

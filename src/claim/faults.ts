@@ -20,16 +20,36 @@ const PLAIN_TAGS = new Set(
   ["map", "seq", "str", "int", "float", "bool", "null"].map((name) => `tag:yaml.org,2002:${name}`),
 );
 
-/** An error of the parser, in our words. */
-export function syntaxFault({ pos: [offset], message }: ParsedYaml["errors"][number]): Fault {
-  if (message.startsWith("Map keys must be unique")) {
-    return { offset, found: "a key for the second time", wanted: "each key once" };
-  }
-  return {
-    offset,
-    found: `text that is not YAML (${echo(message).slice(1, -1)})`,
-    wanted: "well-formed YAML",
-  };
+/** The parser's errors, in our words. */
+export function syntaxFaults(document: ParsedYaml): Fault[] {
+  return document.errors.map(({ pos: [offset], message }) => {
+    if (message.startsWith("Map keys must be unique")) {
+      return { offset, found: "a key for the second time", wanted: "each key once" };
+    }
+    if (message.startsWith("Missing closing")) {
+      return {
+        offset: startOfText(document, offset),
+        found: "a text in quotes that does not end",
+        wanted: "its closing quotation mark",
+      };
+    }
+    return {
+      offset,
+      found: `text that is not YAML (${echo(message).slice(1, -1)})`,
+      wanted: "well-formed YAML",
+    };
+  });
+}
+
+/** Where a text in quotes begins that has not ended at an offset: there, and not at its end, is the slip. */
+function startOfText(document: ParsedYaml, end: number): number {
+  let start = end;
+  visit(document as never, {
+    Scalar: (_, { range, type }) => {
+      if (type?.startsWith("QUOTE") && range && range[1] === end) start = range[0];
+    },
+  });
+  return start;
 }
 
 /** Parts of YAML that no claim needs: anchors, aliases, tags, keys that are not names. */

@@ -17,6 +17,15 @@ interface Rule {
   readonly wanted: string;
 }
 
+/** Figures of the format that are not read off yet. */
+const LATER_FIGURES = [
+  "nodal-advance",
+  "radial-period",
+  "periapsis-distance",
+  "deflection-angle",
+  "end-state",
+];
+
 const isBlock = (value: unknown): boolean => typeof value === "object" && value !== null;
 const RULES: readonly Rule[] = [
   {
@@ -24,6 +33,12 @@ const RULES: readonly Rule[] = [
     applies: () => true,
     found: "stored files or a program",
     wanted: "a solution that the audit can run itself: solution.method and a step",
+  },
+  {
+    path: ["claimed", "quantity"],
+    applies: (value) => LATER_FIGURES.includes(String(value)),
+    found: "a figure of another kind",
+    wanted: "apsidal-advance",
   },
   {
     path: ["scenario", "equations"],

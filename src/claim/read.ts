@@ -16,6 +16,8 @@ export type ReadOutcome =
       readonly file: string;
       /** In the order of the file. */
       readonly problems: readonly Problem[];
+      /** Of the claim, where it has a good one in spite of the problems. */
+      readonly title?: string;
       /** Of the file's bytes; empty when they could not be read. */
       readonly sha256: string;
     };
@@ -72,11 +74,12 @@ const REASONS: Readonly<Record<string, string>> = {
 /** Checks the bytes of a claim file. */
 export function parseClaim(bytes: Uint8Array, file: string): ReadOutcome {
   const sha256 = createHash("sha256").update(bytes).digest("hex");
-  const fail = (problems: readonly Problem[]): ReadOutcome => ({
+  const fail = (problems: readonly Problem[], title?: string): ReadOutcome => ({
     ok: false,
     file,
     problems: inOrder(problems),
     sha256,
+    ...(title === undefined ? {} : { title }),
   });
   const whole = (found: string, wanted: string) =>
     fail([{ file, line: null, column: null, path: "", found, wanted }]);
@@ -95,8 +98,9 @@ export function parseClaim(bytes: Uint8Array, file: string): ReadOutcome {
   const { document } = parsed;
   const report = new Reporter(document, file);
   for (const part of takeLaterParts(document.data)) report.atKey(part.path, part);
-  const claim = buildClaim(shapeOf(document, report), { file, sha256 }, report);
-  return claim === null ? fail(report.problems) : { ok: true, claim };
+  const shaped = shapeOf(document, report);
+  const claim = buildClaim(shaped, { file, sha256 }, report);
+  return claim === null ? fail(report.problems, shaped.title) : { ok: true, claim };
 }
 
 function inOrder(problems: readonly Problem[]): Problem[] {
