@@ -35,6 +35,26 @@ describe("units", () => {
     ["1 century", 3_155_760_000],
   ])("%s is Julian", (text, value) => expect(si(text, "s")).toBe(value));
 
+  // decimal.js: Decimal.acos(-1) at 60 digits. Angles are rounded once, like everything else.
+  it("rounds angles once", () => {
+    const Exact = Decimal.clone({ precision: 60 });
+    const pi = Exact.acos(-1);
+    expect(si("180 deg", "rad")).toBe(Math.PI);
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 9_999_999 }), (digits) => {
+        const text = new Exact(digits).div(10_000).toFixed();
+        expect(si(`${text} arcsec`, "rad")).toBe(new Exact(text).times(pi).div(648_000).toNumber());
+      }),
+    );
+  });
+
+  it("reads an inverse length", () => {
+    expect(si("2 1/km", "1/m")).toBe(0.002);
+    expect(si("2 km^-1", "1/m")).toBe(0.002);
+  });
+
+  it("reads a minus sign wherever a hyphen may stand", () => expect(si("−2e−3 km s^−1", "m/s")).toBe(-2));
+
   it("reads products, quotients and powers, a slash for the next factor alone", () => {
     expect(si("1 km^3/s^2", "m^3/s^2")).toBe(1e9);
     expect(si("1 km^3 s^-2", "m^3/s^2")).toBe(1e9);
@@ -55,6 +75,15 @@ describe("units", () => {
     ["km", "m", /'km'/, /number with a unit/],
     ["1e999 m", "m", /1e999/, /1e60/],
     ["0.2 m", "1", /'m'/, /pure number/],
+    ["1e61 m", "m", /1e61/, /1e60/],
+    ["1e-61 m", "m", /1e-61/, /1e-60/],
+    [`${"9".repeat(62)} m`, "m", /999/, /1e60/],
+    ["3 m^", "m", /'m\^'/, /'m'\?/],
+    ["3 m^10", "m", /'m\^10'/, /unit of m/],
+    ["3 m//s", "m/s", /unit ''/, /unit of m\/s/],
+    ["0x10 m", "m", /'x10'/, /unit of m/],
+    ["Infinity m", "m", /Infinity/, /number with a unit/],
+    ["", "m", /''/, /number with a unit/],
   ])("%s for %s: says what was found and what would be right", (text, unit, found, wanted) => {
     const read = parseQuantity(text, unit);
     if (!("found" in read)) throw new Error("read");
