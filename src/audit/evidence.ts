@@ -60,7 +60,7 @@ function solutionEvidence(
     raw: value,
     null: base,
     value: figure,
-    rounding: solution.rounding,
+    rounding: solution.figure[plan.authors]!.floor,
     readingOff: Math.hypot(ofRun, ofNull),
     crossReading,
   };

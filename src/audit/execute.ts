@@ -10,8 +10,11 @@ export interface ExecuteOptions {
   readonly onProgress?: (part: number) => void;
 }
 
-/** No job is to be larger than this part of the whole, so that the last one does not keep the others waiting. */
-const LARGEST_JOB = 1 / 16;
+/**
+ * No job is to be larger than this part of the whole, so that the last one does not keep the others waiting;
+ * nor much smaller, since each thread that meets a method compiles its loop anew.
+ */
+const LARGEST_JOB = 1 / 4;
 
 /**
  * Does planned tasks on a pool, the dearest jobs first. The figures do not depend on how tasks are bundled.

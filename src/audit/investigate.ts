@@ -1,5 +1,6 @@
 import type { Claim } from "../claim/claim.js";
 import { type BestValue, chooseBest, type MethodEstimate } from "../convergence/best.js";
+import { ENSEMBLE_SIZE } from "../convergence/rounding.js";
 import { nominalLength } from "../measure/limits.js";
 import type { MethodDefinition } from "../methods/definition.js";
 import { type ExecuteOptions, execute } from "./execute.js";
@@ -49,16 +50,20 @@ export async function investigate(
     };
   }
   const plan = planLadder(authorsStep, scenario.period, claim.audit.rungs, cost, AFFORDABLE);
+  const ensembleCost = (step: number): number => ENSEMBLE_SIZE * cost(scenario.period / step);
   const own = (method: MethodDefinition): { readonly ladder: LadderPlan; readonly ensembleRung: number } => {
     const count = rungsWorthRunning(plan, method.order, scenario, claim.audit.rungs);
     const ladder = method === authors ? plan : { ...plan, steps: plan.steps.slice(0, count) };
-    const centre = plan.authors ?? Math.floor(plan.steps.length / 2);
-    return { ladder, ensembleRung: Math.min(centre, ladder.steps.length - 1) };
+    let ensembleRung = Math.min(plan.authors ?? Math.floor(plan.steps.length / 2), ladder.steps.length - 1);
+    // A coarser rung tells of rounding too, where the ensemble would cost more than the ladder may.
+    while (ensembleRung > 0 && ensembleCost(plan.steps[ensembleRung]!) > AFFORDABLE / 2) ensembleRung--;
+    return { ladder, ensembleRung };
   };
   const tasks = methods.flatMap((method) =>
     planTasks(method, scenario, own(method).ladder, own(method).ensembleRung, {
       nullRuns: subtracted || method === authors,
       ledger: method === authors,
+      halvedLedger: authorsCost < AFFORDABLE / 4,
     }),
   );
   const outcomes = await execute(pool, recipe, scenario, tasks, options);

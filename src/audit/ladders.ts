@@ -20,8 +20,6 @@ export interface AnalysedLadder {
   readonly analysis: LadderAnalysis;
   readonly stateDistances: readonly Difference[];
   readonly stateOrder: StateOrder | null;
-  /** 95 % half-width of rounding in the claim's figure at the ensemble's rung. */
-  readonly rounding: number;
 }
 
 /**
@@ -42,26 +40,20 @@ export function analyse(
   const raw = points(runs, unit, push, (on) => on);
   const off = points(runs, unit, push, (_, off) => off);
   const difference = differencePoints(runs, unit, push);
-  const figure = subtracted ? difference.points : raw.points;
+  const figure = subtracted ? difference : raw;
   const analysis = subtracted
-    ? subtractedAnalysis(analyseLadder(raw.points), analyseLadder(off.points), analyseLadder(figure))
-    : analyseLadder(raw.points);
+    ? subtractedAnalysis(analyseLadder(raw), analyseLadder(off), analyseLadder(figure))
+    : analyseLadder(raw);
   const stateDistances = distances(runs, scenario);
   return {
     runs,
-    raw: raw.points,
-    off: off.points,
+    raw,
+    off,
     figure,
     analysis,
     stateDistances,
     stateOrder: stateOrder(stateDistances),
-    rounding: subtracted ? difference.rounding : raw.rounding,
   };
-}
-
-interface Points {
-  readonly points: readonly LadderPoint[];
-  readonly rounding: number;
 }
 
 function points(
@@ -69,7 +61,7 @@ function points(
   unit: QuotedUnit,
   push: number,
   pick: (on: Reading | null, off: Reading | null) => Reading | null,
-): Points {
+): LadderPoint[] {
   return withFloor(
     runs,
     push,
@@ -78,7 +70,7 @@ function points(
   );
 }
 
-function differencePoints(runs: MethodRuns, unit: QuotedUnit, push: number): Points {
+function differencePoints(runs: MethodRuns, unit: QuotedUnit, push: number): LadderPoint[] {
   const difference = (on: Reading | null, off: Reading | null): number | null => {
     const [value, base] = [figureOf(on, unit), figureOf(off, unit)];
     return value === null || base === null ? null : value - base;
@@ -111,13 +103,10 @@ function withFloor(
   push: number,
   values: readonly (number | null)[],
   members: readonly (number | null)[],
-): Points {
+): LadderPoint[] {
   const spread = roundingHalfWidth(members);
   const growth = (k: number) => Math.max(1, 2 ** ((k - runs.ensemble.rung) / 2));
-  return {
-    points: values.map((value, k) => ({ value, floor: Math.hypot(push, (spread ?? 0) * growth(k)) })),
-    rounding: Math.hypot(push, spread ?? 0),
-  };
+  return values.map((value, k) => ({ value, floor: Math.hypot(push, (spread ?? 0) * growth(k)) }));
 }
 
 function subtractedAnalysis(

@@ -47,13 +47,14 @@ export function costPerStep(method: MethodDefinition): number {
  * @param ensembleRung the rung on which rounding is measured
  * @param nullRuns whether null runs are called for: where the claim subtracts them, and for the author's method
  * @param ledger whether what is conserved is to be watched: for the author's method
+ * @param halvedLedger and at half the step too, for its order
  */
 export function planTasks(
   method: MethodDefinition,
   scenario: PreparedScenario,
   ladder: LadderPlan,
   ensembleRung: number,
-  { nullRuns, ledger }: { nullRuns: boolean; ledger: boolean },
+  { nullRuns, ledger, halvedLedger }: { nullRuns: boolean; ledger: boolean; halvedLedger: boolean },
 ): PlannedTask[] {
   const perStep = costPerStep(method);
   const length = nominalLength(scenario);
@@ -89,9 +90,11 @@ export function planTasks(
     early({ in: "ensemble", member, field: "early" }, step, ensembleRung, members[member]!);
   }
   if (ledger) {
-    const step = ladder.steps[ensembleRung]!;
+    const step = ladder.steps[ladder.authors ?? ensembleRung]!;
     add({ in: "ledger", halved: false }, { kind: "ledger", step }, 2 * spanCost(step));
-    add({ in: "ledger", halved: true }, { kind: "ledger", step: step / 2 }, 4 * spanCost(step));
+    if (halvedLedger) {
+      add({ in: "ledger", halved: true }, { kind: "ledger", step: step / 2 }, 4 * spanCost(step));
+    }
     add({ in: "second-reading" }, { kind: "second-reading", step }, 2 * spanCost(step));
   }
   return tasks;
