@@ -29,8 +29,8 @@ export function syntaxFaults(document: ParsedYaml): Fault[] {
     if (message.startsWith("Missing closing")) {
       return {
         offset: startOfText(document, offset),
-        found: "a text in quotes that does not end",
-        wanted: "its closing quotation mark",
+        found: "text that is not YAML (a quotation mark without its fellow)",
+        wanted: "a closing quotation mark",
       };
     }
     return {

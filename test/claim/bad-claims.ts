@@ -240,7 +240,7 @@ export const badClaims: readonly (readonly [
   ["yaml-tag.yaml", [3, 22], "", /the tag/, /a plain value/],
   ["yaml-directive.yaml", [1, 1], "", /a directive/, /without lines in %/],
   ["yaml-two-documents.yaml", [16, 1], "", /a second document/, /one claim a file/],
-  ["yaml-syntax.yaml", [3, 8], "", /a text in quotes that does not end/, /its closing quotation mark/],
+  ["yaml-syntax.yaml", [3, 8], "", /not YAML .a quotation mark without/, /a closing quotation mark/],
   ["yaml-nested.yaml", null, "", /nested without end/, /four levels/],
   ["list.yaml", [2, 1], "", /a list/, /a block of keys/],
   ["empty.yaml", null, "", /an empty file/, /a claim/],
