@@ -1,4 +1,4 @@
-import type { Code } from "./code.js";
+import type { Code, Expression } from "./code.js";
 
 /** What a family needs to write the body of its step. */
 export interface StepContext {
@@ -11,12 +11,15 @@ export interface StepContext {
    *
    * @param prefix makes the names unique in the loop
    * @param bind what each coordinate and rate goes by there
-   * @returns a name for each coordinate's acceleration
+   * @returns a value for each coordinate's acceleration: a name, or a number
    */
-  accelerate(code: Code, prefix: string, bind: (state: string) => string): string[];
+  accelerate(code: Code, prefix: string, bind: (state: string) => Expression): Expression[];
 }
 
-/** One step of a method. The state's names are bare before the step; the body defines `n_` and the name. */
+/**
+ * One step of a method. The state's names are bare before the step; the body defines `next` of each. The step's
+ * length is `h`, the number of steps taken so far `#taken`.
+ */
 export interface StepBody {
   /** Before the loop: what is carried from step to step. */
   readonly before: Code;
@@ -24,7 +27,10 @@ export interface StepBody {
   readonly evaluationsBefore: number;
   readonly step: Code;
   readonly evaluationsPerStep: number;
-  /** Where set, the step keeps count of its evaluations in `evaluations` and sets `failed` where it must. */
+  /**
+   * Where set, the step adds up its evaluations in `evaluations`; where it fails it sets `failed` to 1 and
+   * leaves the loop.
+   */
   readonly implicit: boolean;
 }
 

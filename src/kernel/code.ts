@@ -1,66 +1,104 @@
-/** A language that loop code is printed in. */
-export type Dialect = "javascript" | "c";
+import type { FunctionName } from "../formula/graph.js";
 
 /**
- * Loop code as a list of statements that print in either language with the same operations in the same
- * order. Expressions are written in what both share: names, literals, infix operators, parentheses, and
- * `@name(...)` for a function of the mathematical library.
+ * Loop code as a tree, printed as text or encoded for WebAssembly with the same operations in the same
+ * order. A name that begins with `#` is a counter, an integer; all else are doubles. Counters, and names that
+ * begin with `$`, are one for all runs that a loop steps side by side; any other has a value for each.
  */
+export type Expression = string | number | Operation | Load;
+
+export interface Operation {
+  readonly op: "add" | "subtract" | "multiply" | "divide" | "negate" | "power" | FunctionName;
+  readonly args: readonly Expression[];
+}
+
+/** An element of an array that the function is given. */
+export interface Load {
+  readonly from: "io" | "parameters";
+  readonly index: number;
+}
+
+export interface Comparison {
+  readonly compare: "<" | "<=" | ">=" | "==" | "!=";
+  readonly args: readonly [Expression, Expression];
+}
+export type Condition =
+  | Comparison
+  | { readonly both: readonly [Condition, Condition] }
+  | { readonly either: readonly [Condition, Condition] };
+
+export type Statement =
+  /** A value that never changes; `variable` one that may. */
+  | { readonly do: "define" | "variable" | "set"; readonly name: string; readonly value: Expression }
+  | { readonly do: "store"; readonly index: number; readonly value: Expression }
+  /** Goes round until a `leave` in it, or a return. */
+  | { readonly do: "loop"; readonly body: Code }
+  | { readonly do: "when"; readonly condition: Condition; readonly body: Code }
+  | { readonly do: "leave" }
+  | { readonly do: "return"; readonly value: Expression };
+
+export const isCounter = (value: Expression): boolean => typeof value === "string" && value.startsWith("#");
+
+/** A list of statements, written from first to last. */
 export class Code {
-  readonly #lines: ((dialect: Dialect) => string)[] = [];
+  readonly statements: Statement[] = [];
 
-  /** A value that never changes. */
-  define(name: string, value: string): void {
-    this.#lines.push((to) => `${to === "c" ? "const double" : "const"} ${name} = ${expression(value, to)};`);
+  define(name: string, value: Expression): void {
+    this.statements.push({ do: "define", name, value });
   }
 
-  variable(name: string, value: string): void {
-    this.#lines.push((to) => `${to === "c" ? "double" : "let"} ${name} = ${expression(value, to)};`);
+  variable(name: string, value: Expression): void {
+    this.statements.push({ do: "variable", name, value });
   }
 
-  counter(name: string): void {
-    this.#lines.push((to) => `${to === "c" ? "int" : "let"} ${name} = 0;`);
+  set(name: string, value: Expression): void {
+    this.statements.push({ do: "set", name, value });
   }
 
-  set(name: string, value: string): void {
-    this.#lines.push((to) => `${name} = ${expression(value, to)};`);
+  /** Writes an element of `io`. */
+  store(index: number, value: Expression): void {
+    this.statements.push({ do: "store", index, value });
   }
 
-  /** A line that is the same in both: a brace, a condition, a break. */
-  line(text: string): void {
-    this.#lines.push((to) => expression(text, to));
+  loop(write: (body: Code) => void): void {
+    const body = new Code();
+    write(body);
+    this.statements.push({ do: "loop", body });
+  }
+
+  when(condition: Condition, write: (body: Code) => void): void {
+    const body = new Code();
+    write(body);
+    this.statements.push({ do: "when", condition, body });
+  }
+
+  /** Leaves the innermost loop. */
+  leave(): void {
+    this.statements.push({ do: "leave" });
+  }
+
+  return(value: Expression): void {
+    this.statements.push({ do: "return", value });
   }
 
   append(other: Code): void {
-    this.#lines.push(...other.#lines);
-  }
-
-  print(dialect: Dialect): string {
-    return this.#lines.map((line) => line(dialect)).join("\n");
+    this.statements.push(...other.statements);
   }
 }
 
-const IN_C: Readonly<Record<string, string>> = { abs: "fabs", infinity: "INFINITY" };
-const IN_JAVASCRIPT: Readonly<Record<string, string>> = { infinity: "Infinity" };
+export const plus = (...args: readonly Expression[]): Expression =>
+  args.reduce((sum, term) => ({ op: "add", args: [sum, term] }));
+export const times = (a: Expression, b: Expression): Expression => ({ op: "multiply", args: [a, b] });
+export const compare = (a: Expression, sign: Comparison["compare"], b: Expression): Comparison => ({
+  compare: sign,
+  args: [a, b],
+});
 
-function expression(text: string, dialect: Dialect): string {
-  return text.replaceAll(/@(\w+)/g, (_, name: string) =>
-    dialect === "c" ? (IN_C[name] ?? name) : (IN_JAVASCRIPT[name] ?? `Math.${name}`),
-  );
-}
-
-/** A double as a literal that reads back to the same bits in both languages. */
-export function literal(value: number): string {
-  // C would read a long row of digits without a point as an integer too large for it.
-  const text = Math.abs(value) < 2 ** 31 ? String(value) : value.toExponential();
-  return value < 0 ? `(${text})` : text;
-}
-
-/** Sum of coefficient times name, left to right, without the terms of coefficient zero. */
-export function weightedSum(coefficients: readonly number[], names: readonly string[]): string {
-  const terms = coefficients
-    .map((coefficient, i) => [coefficient, names[i]!] as const)
-    .filter(([coefficient]) => coefficient !== 0)
-    .map(([coefficient, name]) => (coefficient === 1 ? name : `${literal(coefficient)} * ${name}`));
-  return terms.length === 0 ? "0" : terms.join(" + ");
+/** Sum of coefficient times value, left to right, without the terms of coefficient zero. */
+export function weightedSum(coefficients: readonly number[], values: readonly Expression[]): Expression {
+  const terms = coefficients.flatMap((coefficient, i): Expression[] => {
+    if (coefficient === 0) return [];
+    return [coefficient === 1 ? values[i]! : times(coefficient, values[i]!)];
+  });
+  return terms.length === 0 ? 0 : plus(...terms);
 }

@@ -1,7 +1,7 @@
 import { evaluateConstant } from "../formula/constant.js";
 import type { ExplicitRungeKutta } from "../methods/definition.js";
 import { next, type StepBody, type StepContext } from "./body.js";
-import { Code, weightedSum } from "./code.js";
+import { Code, type Expression, plus, times, weightedSum } from "./code.js";
 
 /** Stages in straight lines: y + h (a1 k1 + a2 k2 + ...), the sum from left to right, zeros left out. */
 export function explicitRungeKutta(method: ExplicitRungeKutta, context: StepContext): StepBody {
@@ -10,10 +10,10 @@ export function explicitRungeKutta(method: ExplicitRungeKutta, context: StepCont
   const b = method.b.map(evaluateConstant);
   const step = new Code();
   // Derivatives of each state at each stage: of a coordinate its rate, of a rate its acceleration.
-  const slopes: Record<string, string[]> = {};
+  const slopes: Record<string, Expression[]> = {};
   for (const state of [...coordinates, ...rates]) slopes[state] = [];
-  const combine = (state: string, weights: readonly number[]): string =>
-    `${state} + h * (${weightedSum(weights, slopes[state]!)})`;
+  const combine = (state: string, weights: readonly number[]): Expression =>
+    plus(state, times("h", weightedSum(weights, slopes[state]!)));
 
   for (let stage = 0; stage < b.length; stage++) {
     const weights = a[stage]!;

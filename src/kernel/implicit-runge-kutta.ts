@@ -1,7 +1,7 @@
 import { evaluateConstant } from "../formula/constant.js";
 import type { Coefficient, ImplicitRungeKutta } from "../methods/definition.js";
 import { next, type StepBody, type StepContext } from "./body.js";
-import { Code, literal, weightedSum } from "./code.js";
+import { Code, compare, type Expression, plus, times, weightedSum } from "./code.js";
 
 /** Sweeps after which a step that still changes is given up. */
 const MOST_SWEEPS = 60;
@@ -38,51 +38,62 @@ export function implicitRungeKutta(method: ImplicitRungeKutta, context: StepCont
   }
 
   const step = new Code();
-  step.line("if (taken > 0) {");
-  for (const stage of stages) {
-    for (const i of axes) step.define(`g${stage}_${i}`, weightedSum(onward[stage]!, row(i)));
-  }
-  for (const stage of stages) {
-    for (const i of axes) step.set(K(i, stage), `g${stage}_${i}`);
-  }
-  step.line("}");
-  step.variable("last", "@infinity");
-  step.counter("sweeps");
-  step.line("for (;;) {");
-  step.line("sweeps++;");
-  step.variable("change", "0");
-  for (const stage of stages) {
-    coordinates.forEach((q, i) => {
-      const drift = `${literal(c[stage]!)} * ${rates[i]}`;
-      step.define(`${q}_${stage}`, `${q} + h * (${drift} + h * (${weightedSum(squared[stage]!, row(i))}))`);
-    });
-    if (context.velocityDependent) {
-      rates.forEach((v, i) => {
-        step.define(`${v}_${stage}`, `${v} + h * (${weightedSum(a[stage]!, row(i))})`);
+  step.when(compare("#taken", ">=", 1), (then) => {
+    for (const stage of stages) {
+      for (const i of axes) then.define(`g${stage}_${i}`, weightedSum(onward[stage]!, row(i)));
+    }
+    for (const stage of stages) {
+      for (const i of axes) then.set(K(i, stage), `g${stage}_${i}`);
+    }
+  });
+  step.variable("last", Number.POSITIVE_INFINITY);
+  step.variable("sweeps", 0);
+  step.loop((sweep) => {
+    sweep.set("sweeps", plus("sweeps", 1));
+    for (const stage of stages) {
+      coordinates.forEach((q, i) => {
+        const drift = plus(times(c[stage]!, rates[i]!), times("h", weightedSum(squared[stage]!, row(i))));
+        sweep.define(`${q}_${stage}`, plus(q, times("h", drift)));
+      });
+      if (context.velocityDependent) {
+        rates.forEach((v, i) => {
+          sweep.define(`${v}_${stage}`, plus(v, times("h", weightedSum(a[stage]!, row(i)))));
+        });
+      }
+    }
+    const changes: Expression[] = [];
+    for (const stage of stages) {
+      const accelerations = context.accelerate(sweep, `s${stage}_`, (state) => `${state}_${stage}`);
+      accelerations.forEach((value, i) => {
+        sweep.define(`d${stage}_${i}`, absolute({ op: "subtract", args: [value, K(i, stage)] }));
+        sweep.set(K(i, stage), value);
+        changes.push(`d${stage}_${i}`);
       });
     }
-  }
-  for (const stage of stages) {
-    const accelerations = context.accelerate(step, `s${stage}_`, (state) => `${state}_${stage}`);
-    accelerations.forEach((name, i) => {
-      step.set("change", `change + @abs(${name} - ${K(i, stage)})`);
-      step.set(K(i, stage), name);
+    sweep.define("change", plus(...changes));
+    // Of a sweep that still gains, the size is not asked.
+    sweep.when(compare("change", ">=", "last"), (then) => {
+      const size = plus(...stages.flatMap((stage) => axes.map((i) => absolute(K(i, stage)))));
+      then.when(compare("change", "<=", times(ROUNDING, size)), (within) => within.leave());
     });
-  }
-  // Of a sweep that still gains, the size is not asked.
-  const size = stages.flatMap((stage) => axes.map((i) => `@abs(${K(i, stage)})`)).join(" + ");
-  step.line(`if (change >= last && change <= ${ROUNDING} * (${size})) break;`);
-  step.line("if (change == 0) break;");
-  step.line(`if (sweeps == ${MOST_SWEEPS} || change != change) { failed = 1; break; }`);
-  step.set("last", "change");
-  step.line("}");
-  step.line(`evaluations = evaluations + sweeps * ${stages.length};`);
-  step.line("if (failed == 1) break;");
+    sweep.when(compare("change", "==", 0), (then) => then.leave());
+    const giveUp = {
+      either: [compare("sweeps", "==", MOST_SWEEPS), compare("change", "!=", "change")],
+    } as const;
+    sweep.when(giveUp, (then) => {
+      then.set("failed", 1);
+      then.leave();
+    });
+    sweep.set("last", "change");
+  });
+  step.set("evaluations", plus("evaluations", times("sweeps", stages.length)));
+  step.when(compare("failed", "==", 1), (then) => then.leave());
   coordinates.forEach((q, i) => {
-    step.define(next(q), `${q} + h * (${rates[i]} + h * (${weightedSum(last, row(i))}))`);
+    const drift = plus(rates[i]!, times("h", weightedSum(last, row(i))));
+    step.define(next(q), plus(q, times("h", drift)));
   });
   rates.forEach((v, i) => {
-    step.define(next(v), `${v} + h * (${weightedSum(b, row(i))})`);
+    step.define(next(v), plus(v, times("h", weightedSum(b, row(i)))));
   });
   return { before, evaluationsBefore: 1, step, evaluationsPerStep: stages.length, implicit: true };
 }
@@ -100,3 +111,5 @@ function extrapolation(c: readonly number[]): number[][] {
     ),
   );
 }
+
+const absolute = (value: Expression): Expression => ({ op: "abs", args: [value] });

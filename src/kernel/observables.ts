@@ -1,6 +1,7 @@
-import { Code } from "./code.js";
+import { Code, type Expression } from "./code.js";
 import { writeExpressions } from "./expressions.js";
 import type { CompiledSystem } from "./system.js";
+import { expression, print } from "./text.js";
 
 /** A conserved quantity as a function of the state, with the parameters put in. */
 export interface Observable {
@@ -12,15 +13,21 @@ export interface Observable {
 
 /** @param parameters in the order of the system's */
 export function conservedObservables(system: CompiledSystem, parameters: readonly number[]): Observable[] {
-  const bind = (symbol: string): string => {
+  const bind = (symbol: string): Expression => {
     const state = system.states.indexOf(symbol);
-    return state >= 0 ? `state[${state}]` : `parameters[${system.symbols.indexOf(symbol)}]`;
+    if (state >= 0) return { from: "io", index: state };
+    return { from: "parameters", index: system.symbols.indexOf(symbol) };
   };
   return system.conserved.map(({ name, components, truncatedAt }) => {
     const code = new Code();
-    const names = writeExpressions(code, components, "q", bind);
-    code.line(`return [${names.join(", ")}];`);
-    const compute = new Function("state", "parameters", code.print("javascript"));
+    const values = writeExpressions(code, components, "q", bind).map((value) =>
+      expression(value, "javascript"),
+    );
+    const compute = new Function(
+      "io",
+      "parameters",
+      `${print(code, "javascript")}\nreturn [${values.join(", ")}];`,
+    );
     return { name, truncatedAt, value: (state) => compute(state, parameters) as number[] };
   });
 }

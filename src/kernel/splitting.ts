@@ -1,7 +1,7 @@
 import { evaluateConstant } from "../formula/constant.js";
 import type { Splitting } from "../methods/definition.js";
 import { next, type StepBody, type StepContext } from "./body.js";
-import { Code, literal } from "./code.js";
+import { Code, type Expression, plus, times } from "./code.js";
 
 /**
  * Kicks and drifts in the order given. A kick at coordinates that have not moved since the last kick uses
@@ -21,16 +21,16 @@ export function splitting(method: Splitting, context: StepContext): StepBody {
       before.variable(name, start[i]!);
     });
   }
-  let accelerations: readonly string[] | null = carried ? carry : null;
+  let accelerations: readonly Expression[] | null = carried ? carry : null;
   let evaluations = 0;
-  const move = (state: string, stage: number, rate: string): void => {
+  const move = (state: string, stage: number, rate: Expression): void => {
     const moved = `${state}_${stage}`;
-    step.define(moved, `${at(state)} + w${stage} * ${rate}`);
+    step.define(moved, plus(at(state), times(`w${stage}`, rate)));
     names.set(state, moved);
   };
   method.stages.forEach((part, stage) => {
     const weight = evaluateConstant("drift" in part ? part.drift : part.kick);
-    before.define(`w${stage}`, `${literal(weight)} * h`);
+    before.define(`w${stage}`, times(weight, "h"));
     if ("drift" in part) {
       coordinates.forEach((coordinate, i) => {
         move(coordinate, stage, at(rates[i]!));

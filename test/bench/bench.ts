@@ -5,6 +5,7 @@ import { join } from "node:path";
 import { fileURLToPath } from "node:url";
 import { findEquations } from "../../src/equations/catalog/index.js";
 import { compileStepLoop, stepLoopInC } from "../../src/kernel/compile.js";
+import { compilePairLoop } from "../../src/kernel/pair-loop.js";
 import { runPassages } from "../../src/measure/passages.js";
 import { findMethod } from "../../src/methods/catalog/index.js";
 import { compileC, hasGcc, runC } from "../kernel/gcc.js";
@@ -53,8 +54,8 @@ const contests: readonly Contest[] = [
   { name: "newtonian", start: newtonian, method: "yoshida-8", twin: null },
 ];
 
-/** Nanoseconds a step of the generated loop. */
-function javascript({ start, method }: Contest): () => number {
+/** Nanoseconds a step of the compiled loop. */
+function alone({ start, method }: Contest): () => number {
   const loop = compileStepLoop(start.system, findMethod(method)!);
   const parameters = Float64Array.from(start.parameters);
   const step = start.period / PER_ORBIT;
@@ -64,6 +65,25 @@ function javascript({ start, method }: Contest): () => number {
     const began = performance.now();
     for (let left = STEPS; left > 0; ) left -= loop.advance(io, parameters, step, left);
     return ((performance.now() - began) * 1e6) / STEPS;
+  };
+}
+
+/** Nanoseconds a step and run of two runs side by side, with the effect and without; null where that cannot be. */
+function sideBySide({ start, method }: Contest): (() => number) | null {
+  const pair = compilePairLoop(start.system, findMethod(method)!);
+  if (pair === null) return null;
+  const parameters = [
+    start.parameters,
+    start.parameters.map((x, i) => (i === 1 ? Number.POSITIVE_INFINITY : x)),
+  ];
+  const both = parameters.map((values) => Float64Array.from(values)) as [Float64Array, Float64Array];
+  const step = start.period / PER_ORBIT;
+  return () => {
+    const io = [new Float64Array(pair.ioLength), new Float64Array(pair.ioLength)] as const;
+    for (const one of io) one.set(start.state);
+    const began = performance.now();
+    for (let left = STEPS; left > 0; ) left -= pair.advance(io, both, step, left);
+    return ((performance.now() - began) * 1e6) / STEPS / 2;
   };
 }
 
@@ -89,25 +109,31 @@ int main(void) {
 }
 
 function stepLoops(gcc: boolean): void {
-  console.log("\nWarm step loop, nanoseconds a step (planar; gcc -O2)\n");
-  console.log("equations           method              JavaScript        C     ratio");
+  console.log("\nWarm step loop, nanoseconds a step and run, and parts of C's time (planar; gcc -O2)\n");
+  console.log("equations         method                  C     alone  ratio  side by side  ratio");
   for (const contest of contests) {
-    const run = javascript(contest);
+    const runs = [alone(contest), sideBySide(contest)];
     const program = gcc ? compileC(inCProgram(contest)) : null;
-    for (let warm = 0; warm < RUNS; warm++) run();
-    const own: number[] = [];
+    for (const run of runs) for (let warm = 0; warm < RUNS; warm++) run?.();
+    const times: number[][] = runs.map(() => []);
     const theirs: number[] = [];
     for (let turn = 0; turn < TURNS; turn++) {
-      for (let i = 0; i < RUNS; i++) own.push(run());
+      runs.forEach((run, i) => {
+        for (let k = 0; run !== null && k < RUNS; k++) times[i]!.push(run());
+      });
       if (program !== null) theirs.push(...program.run().trim().split("\n").map(Number));
     }
     program?.remove();
-    const [js, c] = [Math.min(...own), Math.min(...theirs)];
-    const beside = gcc ? `${c.toFixed(1).padStart(8)}  ${(js / c).toFixed(2).padStart(8)}` : "  no gcc";
-    const twin = contest.twin === null ? "" : "  hand-written C";
-    console.log(
-      `${contest.name.padEnd(20)}${contest.method.padEnd(20)}${js.toFixed(1).padStart(10)} ${beside}${twin}`,
-    );
+    const c = gcc ? Math.min(...theirs) : null;
+    const column = (values: readonly number[], width: number): string => {
+      const least = Math.min(...values);
+      if (!Number.isFinite(least)) return "-".padStart(width) + "-".padStart(7);
+      return least.toFixed(1).padStart(width) + (c === null ? "-" : (least / c).toFixed(2)).padStart(7);
+    };
+    const beside = `${c === null ? "no gcc" : c.toFixed(1)}`.padStart(7);
+    const name = contest.name.padEnd(18) + contest.method.padEnd(18);
+    const twin = contest.twin === null ? "" : "  C by hand";
+    console.log(name + beside + column(times[0]!, 10) + column(times[1]!, 14) + twin);
   }
 }
 
@@ -136,14 +162,14 @@ function ladder(gcc: boolean): void {
     return performance.now() - began;
   };
   const first = all();
-  const warm = median(Array.from({ length: 5 }, all));
+  const warm = Math.min(...Array.from({ length: 15 }, all));
   const functions = LADDER.map((name, i) => stepLoopInC(system, findMethod(name)!, `twin${i}`)).join("\n");
   const program = `${TIMER}${functions}
 typedef int (*Loop)(double *, const double *, double, int);
 int main(void) {
   Loop loops[] = {${LADDER.map((_, i) => `twin${i}`).join(", ")}};
   int rungs[] = {${RUNGS.join(", ")}};
-  for (int run = 0; run < 5; run++) {
+  for (int run = 0; run < 15; run++) {
     double began = now(), sum = 0;
     for (int m = 0; m < ${LADDER.length}; m++)
       for (int r = 0; r < ${RUNGS.length}; r++) {
@@ -156,12 +182,12 @@ int main(void) {
   }
   return 0;
 }`;
-  const c = gcc ? median(runC(program).trim().split("\n").map(Number)) : null;
+  const c = gcc ? Math.min(...runC(program).trim().split("\n").map(Number)) : null;
   console.log(
     `\nLadder of ${LADDER.length} methods, ${RUNGS.length} rungs (32 to 4096 steps an orbit), ${ORBITS} orbits, milliseconds\n`,
   );
   console.log(
-    `JavaScript, cold ${first.toFixed(0)}, warm ${warm.toFixed(0)}; C ${c === null ? "no gcc" : `${c.toFixed(0)}; ratio ${(warm / c).toFixed(2)}`}`,
+    `cold ${first.toFixed(0)}, warm ${warm.toFixed(0)}; C ${c === null ? "no gcc" : `${c.toFixed(0)}; ratio ${(warm / c).toFixed(2)}`}`,
   );
 }
 

@@ -3,7 +3,7 @@ import { equationsCatalog, findEquations } from "../../src/equations/catalog/ind
 import type { EquationsDefinition } from "../../src/equations/definition.js";
 import { evaluate, inOrder, mentions } from "../../src/formula/walk.js";
 import { appliesTo } from "../../src/kernel/applies-to.js";
-import { compileStepLoop } from "../../src/kernel/compile.js";
+import { compileStepLoop, stepLoopInC } from "../../src/kernel/compile.js";
 import { conservedObservables } from "../../src/kernel/observables.js";
 import { compileSystem } from "../../src/kernel/system.js";
 import { findMethod, methodsCatalog } from "../../src/methods/catalog/index.js";
@@ -107,7 +107,7 @@ describe("a generated loop", () => {
     };
     const compiled = compileSystem(odd, { parameters: ["GM"], planar: false });
     const loop = compileStepLoop(compiled, findMethod("rk4")!);
-    const text = loop.advance.toString();
+    const text = stepLoopInC(compiled, findMethod("rk4")!, "loop");
     for (const name of ["constructor", "__proto__", "arguments", "eval"]) expect(text).not.toContain(name);
 
     const io = new Float64Array(loop.ioLength);
