@@ -7,12 +7,18 @@ export function settableParameters({ parameters }: EquationsDefinition) {
   return Object.entries(parameters).filter(([, { fromStart }]) => fromStart === undefined);
 }
 
-/** Coordinates, then rates, with their units. */
-export function variablesOf({ coordinates, form }: EquationsDefinition): Map<string, string> {
+/**
+ * What a starting state is made of, with units: coordinates, rates, and the parameters that elements would
+ * set, GM/h² of an orbit equation.
+ */
+export function variablesOf({ coordinates, form, parameters }: EquationsDefinition): Map<string, string> {
   const all = Object.entries(coordinates);
   return new Map([
     ...all.map(([name, { unit }]) => [name, unit] as const),
     ...all.map(([, { rate, unit }]) => [rate, form === "angle" ? unit : `${unit}/s`] as const),
+    ...Object.entries(parameters)
+      .filter(([, { fromStart }]) => fromStart !== undefined)
+      .map(([name, { unit }]) => [name, unit] as const),
   ]);
 }
 

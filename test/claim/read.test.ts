@@ -52,6 +52,49 @@ describe("a claim in SI", () => {
   });
 });
 
+describe("a start in SI", () => {
+  const scenarioOf = async (name: string) => {
+    const read = await readClaim(new URL(name, fixtures).pathname);
+    if (!read.ok) throw new Error(read.problems.map(formatProblem).join());
+    return read.claim.scenario;
+  };
+
+  it("by semi-major axis and eccentricity has its apsides at a (1 - e) and a (1 + e)", async () => {
+    const { start, span } = await scenarioOf("oblate-inclined.yaml");
+    expect(start).toMatchObject({ kind: "elements", turningPoints: false, trueAnomaly: 0 });
+    if (start.kind !== "elements") throw new Error("kind");
+    expect(start.periapsis / (190e6 * 0.88)).toBeCloseTo(1, 15);
+    expect(start.apoapsis / (190e6 * 1.12)).toBeCloseTo(1, 15);
+    expect([start.inclination, start.node, start.argumentOfPeriapsis]).toEqual(
+      [28, 40, 75].map((degrees) => expect.closeTo((degrees * Math.PI) / 180, 15)),
+    );
+    expect(span).toEqual({ kind: "time", length: 400 * 86_400, text: "400 d" });
+  });
+
+  it("by turning points says so", async () =>
+    expect(await scenarioOf("strong-field.yaml")).toMatchObject({
+      start: { kind: "elements", periapsis: 30_000, apoapsis: 55_000, turningPoints: true },
+      parameters: { c: 299_792_458 },
+      span: { kind: "angle", length: 60 },
+    }));
+
+  it("by a state has the variables of the equations, z and vz left out", async () =>
+    expect((await scenarioOf("from-state.json")).start).toEqual({
+      kind: "state",
+      values: { x: 44_879_361_210, y: 0, vx: -6000, vy: 61_000 },
+    }));
+
+  it("by a state in the angle has GM/h² too", async () => {
+    const { start } = await scenarioOf("from-state-in-angle.yaml");
+    if (start.kind !== "state") throw new Error("kind");
+    expect(start.values).toEqual({
+      u: 2.1 / 149_597_870_700,
+      w: expect.closeTo(-0.3 / 149_597_870_700, 25),
+      "inverse-semi-latus-rectum": expect.closeTo(1.8 / 149_597_870_700, 25),
+    });
+  });
+});
+
 describe("a claim in another dress", () => {
   const json = readFileSync(new URL("from-state.json", fixtures), "utf8");
   it.each([
