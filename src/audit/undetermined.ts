@@ -9,7 +9,7 @@ export function undetermined(
   file: string,
   reason: string,
   origin: Provenance,
-  claim: Pick<Claim, "title" | "claimed"> | null = null,
+  claim: { readonly title: string; readonly claimed?: Claim["claimed"] } | null = null,
 ): ClaimResult {
   return {
     file,
@@ -19,7 +19,7 @@ export function undetermined(
     digits: null,
     reason,
     gradeRule: "Nothing was run, so there is nothing to grade.",
-    claimed: claim && claimedOf(claim.claimed),
+    claimed: claim?.claimed === undefined ? null : claimedOf(claim.claimed),
     asSolved: { value: null, null: null, error: null, halfWidth: null },
     crossReading: null,
     best: { value: null, halfWidth: null, from: null, says: "Nothing was run." },
@@ -42,9 +42,19 @@ export function claimedOf(claimed: Claim["claimed"]): NonNullable<ClaimResult["c
 }
 
 /** The entry of a file that holds no claim that can be read, with what is wrong with it. */
-export function unreadable({ file, problems, sha256 }: Extract<ReadOutcome, { ok: false }>): ClaimResult {
+export function unreadable({
+  file,
+  problems,
+  sha256,
+  title,
+}: Extract<ReadOutcome, { ok: false }>): ClaimResult {
   const reason = problems
     .map((problem) => (problem.line === null ? "" : `line ${problem.line}, `) + problemInWords(problem))
     .join("; ");
-  return undetermined(file, `The claim could not be read: ${reason}.`, { file, sha256 });
+  return undetermined(
+    file,
+    `The claim could not be read: ${reason}.`,
+    { file, sha256 },
+    title === undefined ? null : { title },
+  );
 }
