@@ -22,6 +22,8 @@ export interface Investigation {
   readonly best: BestValue | null;
 }
 
+/** Methods of this order or less are among the witnesses for the eye. */
+const LOW_ORDER = 2;
 /** Evaluations that a whole audit takes by choice: some ten seconds on one core. */
 const AFFORDABLE = 1e9;
 /** Evaluations that it takes where the author's own step asks for them: some minutes. */
@@ -52,7 +54,10 @@ export async function investigate(
   const plan = planLadder(authorsStep, scenario.period, claim.audit.rungs, cost, AFFORDABLE);
   const ensembleCost = (step: number): number => ENSEMBLE_SIZE * cost(scenario.period / step);
   const own = (method: MethodDefinition): { readonly ladder: LadderPlan; readonly ensembleRung: number } => {
-    const count = rungsWorthRunning(plan, method.order, scenario, claim.audit.rungs);
+    const fewest = Math.min(claim.audit.rungs, plan.steps.length);
+    // A witness of low order that nobody asked for shows where it is going; it never carries the value.
+    const idle = claim.audit.witnesses === null && method.order <= LOW_ORDER;
+    const count = idle ? fewest : rungsWorthRunning(plan, method.order, scenario, fewest);
     const ladder = method === authors ? plan : { ...plan, steps: plan.steps.slice(0, count) };
     let ensembleRung = Math.min(plan.authors ?? Math.floor(plan.steps.length / 2), ladder.steps.length - 1);
     // A coarser rung tells of rounding too, where the ensemble would cost more than the ladder may.
