@@ -53,11 +53,12 @@ export async function investigate(
   }
   const plan = planLadder(authorsStep, scenario.period, claim.audit.rungs, cost, AFFORDABLE);
   const ensembleCost = (step: number): number => ENSEMBLE_SIZE * cost(scenario.period / step);
+  // A witness of low order that nobody asked for shows where it is going; it never carries the value.
+  const idle = (method: MethodDefinition): boolean =>
+    method !== authors && claim.audit.witnesses === null && method.order <= LOW_ORDER;
   const own = (method: MethodDefinition): { readonly ladder: LadderPlan; readonly ensembleRung: number } => {
     const fewest = Math.min(claim.audit.rungs, plan.steps.length);
-    // A witness of low order that nobody asked for shows where it is going; it never carries the value.
-    const idle = claim.audit.witnesses === null && method.order <= LOW_ORDER;
-    const count = idle ? fewest : rungsWorthRunning(plan, method.order, scenario, fewest);
+    const count = idle(method) ? fewest : rungsWorthRunning(plan, method.order, scenario, fewest);
     const ladder = method === authors ? plan : { ...plan, steps: plan.steps.slice(0, count) };
     let ensembleRung = Math.min(plan.authors ?? Math.floor(plan.steps.length / 2), ladder.steps.length - 1);
     // A coarser rung tells of rounding too, where the ensemble would cost more than the ladder may.
@@ -68,6 +69,7 @@ export async function investigate(
     planTasks(method, scenario, own(method).ladder, own(method).ensembleRung, {
       nullRuns: subtracted || method === authors,
       ledger: method === authors,
+      ensemble: !idle(method),
       halvedLedger: authorsCost < AFFORDABLE / 4,
     }),
   );

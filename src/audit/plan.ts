@@ -43,9 +43,9 @@ export function planLadder(
 
 /**
  * A method of order p brings the error of a figure to rounding, some 1e-14, at about 4 · 10^(14/p) steps to an
- * orbit as tight as the periapsis; rungs beyond four times that show rounding alone.
+ * orbit as tight as the periapsis; rungs beyond twice that show rounding alone.
  */
-const DOWN_TO_ROUNDING = 16;
+const DOWN_TO_ROUNDING = 8;
 
 /**
  * Rungs of a witness's ladder: those that can show more than rounding, and at least `fewest`.

@@ -45,21 +45,20 @@ export function costPerStep(method: MethodDefinition): number {
  * Everything to run with one method.
  *
  * @param ensembleRung the rung on which rounding is measured
- * @param nullRuns whether null runs are called for: where the claim subtracts them, and for the author's method
- * @param ledger whether what is conserved is to be watched: for the author's method
- * @param halvedLedger and at half the step too, for its order
+ * @param wanted null runs where the claim subtracts them and for the author's method; the ensemble where a
+ *   ladder may come down to rounding; the ledger, and at half the step too, for the author's method
  */
 export function planTasks(
   method: MethodDefinition,
   scenario: PreparedScenario,
   ladder: LadderPlan,
   ensembleRung: number,
-  { nullRuns, ledger, halvedLedger }: { nullRuns: boolean; ledger: boolean; halvedLedger: boolean },
+  wanted: { nullRuns: boolean; ensemble: boolean; ledger: boolean; halvedLedger: boolean },
 ): PlannedTask[] {
   const perStep = costPerStep(method);
   const length = nominalLength(scenario);
   const spanCost = (step: number): number => (length / step) * perStep;
-  const separateNull = nullRuns && scenario.nullParameters !== null;
+  const separateNull = wanted.nullRuns && scenario.nullParameters !== null;
   const effects: readonly ("on" | "off")[] = separateNull ? ["on", "off"] : ["on"];
   const coarse = earlySteps(ladder.steps[0]!, scenario.period);
   const tasks: PlannedTask[] = [];
@@ -84,15 +83,15 @@ export function planTasks(
     early({ in: "finer-early", index }, ladder.steps[0]! / 2 ** halvings, halvings);
   }
   const members = lastBitEnsemble(scenario.state);
-  for (let member = 0; member < ENSEMBLE_SIZE; member++) {
+  for (let member = 0; wanted.ensemble && member < ENSEMBLE_SIZE; member++) {
     const step = ladder.steps[ensembleRung]!;
     for (const field of effects) run({ in: "ensemble", member, field }, step, field, members[member]!);
     early({ in: "ensemble", member, field: "early" }, step, ensembleRung, members[member]!);
   }
-  if (ledger) {
+  if (wanted.ledger) {
     const step = ladder.steps[ladder.authors ?? ensembleRung]!;
     add({ in: "ledger", halved: false }, { kind: "ledger", step }, 2 * spanCost(step));
-    if (halvedLedger) {
+    if (wanted.halvedLedger) {
       add({ in: "ledger", halved: true }, { kind: "ledger", step: step / 2 }, 4 * spanCost(step));
     }
     add({ in: "second-reading" }, { kind: "second-reading", step }, 2 * spanCost(step));

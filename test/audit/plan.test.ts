@@ -41,8 +41,8 @@ describe("rungsWorthRunning", () => {
 
   it("leaves out what would show rounding alone: the sooner the higher the order", () => {
     expect(finest(4, 0.2)).toBe(8192);
-    expect(finest(6, 0.2)).toBe(4096);
-    expect(finest(8, 0.2)).toBe(2048);
+    expect(finest(6, 0.2)).toBe(2048);
+    expect(finest(8, 0.2)).toBe(512 * 2 ** (8 - 1 - plan.authors!));
   });
 
   it("keeps them where the periapsis is tight, and keeps the rungs asked for", () => {
