@@ -101,9 +101,11 @@ describe("a terminal", () => {
 
   it("is coloured unless NO_COLOR or --colour never ask otherwise", async () => {
     const line = `${RUN} audit quick.yaml --no-report`;
-    expect((await onTerminal(`env -u NO_COLOR ${line}`)).stdout).toContain(BOLD);
+    expect((await onTerminal(`env -u NO_COLOR -u CI TERM=xterm-256color ${line}`)).stdout).toContain(BOLD);
     expect((await onTerminal(line)).stdout).not.toContain(BOLD);
-    expect((await onTerminal(`env -u NO_COLOR ${line} --colour never`)).stdout).not.toContain(BOLD);
+    expect(
+      (await onTerminal(`env -u NO_COLOR -u CI TERM=xterm-256color ${line} --colour never`)).stdout,
+    ).not.toContain(BOLD);
   });
 
   it("is not needed for colour when asked for", async () => {
