@@ -9,7 +9,6 @@ export const dormandPrince8: ExplicitRungeKutta = {
     "E. Hairer, S. P. Nørsett and G. Wanner, Solving Ordinary Differential Equations I, 2nd ed. (Springer, 1993), II.5 (coefficients of DOP853; after P. J. Prince and J. R. Dormand, J. Comput. Appl. Math. 7, 67, 1981)",
   symmetric: false,
   symplectic: false,
-  note: "Its apsidal advance converges faster than its state where the leading error turns no apsis in the mean.",
   a: [
     [],
     ["0.0526001519587677318785587544488"],
