@@ -153,6 +153,16 @@ describe("checks", () => {
     expect(outcome({ solution: { value: 42.98044 + 0.00168 } }, "carries-digits")).toBe("fail");
   });
 
+  it("agrees: a miss that no digit hangs on calls for caution", () => {
+    const off = (distance: number) => ({
+      witness: { extrapolated: { value: 42.98044 + distance, halfWidth: 1e-6 } },
+    });
+    // A three-hundredth of the margin of 0.005 is 1.7e-5.
+    expect(outcome(off(1.9e-6), "agrees")).toBe("pass");
+    expect(outcome(off(1.6e-5), "agrees")).toBe("caution");
+    expect(outcome(off(1.8e-5), "agrees")).toBe("fail");
+  });
+
   it("agrees: with caution where the eccentricity vector reads the run differently", () => {
     const reading = (value: number) => ({ solution: { crossReading: { value, halfWidth: 0.1 } } });
     expect(outcome(reading(62.1), "agrees")).toBe("pass");
