@@ -1,11 +1,14 @@
 import type { ClaimResult } from "../../result/result.js";
-import { bestInWords, figure, size } from "../../result/words.js";
+import { size } from "../../result/words.js";
+import { asWritten, bestShown, blanks, margin as marginOf, shown } from "../format.js";
 import { typeset } from "./typeset.js";
 
 /** One line of the table of figures. */
 export interface FigureRow {
   readonly name: string;
   readonly value: string;
+  /** Left blank behind the value, to set the points of the column in line. */
+  readonly blank: string;
   /** Half-width, empty where there is none. */
   readonly margin: string;
   readonly note: string;
@@ -13,12 +16,6 @@ export interface FigureRow {
 
 const NONE = "none";
 const NO_SOLUTION = "the claim gives no solution";
-
-/** With the noughts at its end, where it is written without an exponent. */
-function asWritten({ text, value }: NonNullable<ClaimResult["claimed"]>): string {
-  const written = /^[-+\u2212]?[\d.]+(?=[\s(±+°]|$)/u.exec(text.trim())?.[0];
-  return written !== undefined && Number(written.replace("\u2212", "-")) === value ? written : String(value);
-}
 
 /** The claimed and recomputed figures, all in the claim's unit. */
 export function figureRows({
@@ -30,26 +27,21 @@ export function figureRows({
 }: ClaimResult): readonly FigureRow[] {
   if (claimed === null) return [];
   const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
-  const number = (value: number | null): string => {
-    if (value === null) return NONE;
-    // What is below every digit of interest still is not nothing.
-    return typeset(Math.abs(value) <= fine ? size(value) : figure(value, fine));
-  };
+  const number = (value: number | null): string => (value === null ? NONE : typeset(shown(value, fine)));
   const margin = (halfWidth: number | null): string =>
     halfWidth === null ? "" : `± ${typeset(size(halfWidth))}`;
   const subtracted = claimed.baseline === "subtracted";
-  const row = (name: string, value: string, half: number | null, note: string): FigureRow => ({
+  const row = (name: string, value: string, half: number | null, note: string) => ({
     name,
     value,
     margin: margin(half),
     note,
   });
-  return [
+  const rows = [
     {
       name: "claimed",
       value: typeset(asWritten(claimed)),
-      // As the author gave it, without digits of ours.
-      margin: `± ${typeset(String(Number(claimed.halfWidth.toPrecision(3))))}`,
+      margin: `± ${typeset(marginOf(claimed))}`,
       note: subtracted ? "a null run taken off, as the claim says" : "as it came out, no null run taken off",
     },
     row(
@@ -71,16 +63,14 @@ export function figureRows({
       : [
           row(
             "by the vector",
-            typeset(figure(crossReading.value, crossReading.halfWidth / 100)),
+            typeset(shown(crossReading.value, crossReading.halfWidth / 100)),
             crossReading.halfWidth,
             "a second reading of the run: drift of the eccentricity vector, end less start",
           ),
         ]),
     row(
       "best value",
-      best.value === null
-        ? NONE
-        : typeset(bestInWords({ value: best.value, halfWidth: best.halfWidth ?? 0 }, claimed)),
+      best.value === null ? NONE : typeset(bestShown(best.value, best.halfWidth, claimed)),
       best.halfWidth,
       typeset(best.says),
     ),
@@ -91,4 +81,6 @@ export function figureRows({
       setup?.method ? "as solved less the best value" : NO_SOLUTION,
     ),
   ];
+  const behind = blanks(rows.map(({ value }) => value));
+  return rows.map((one, k) => ({ ...one, blank: behind[k]! }));
 }

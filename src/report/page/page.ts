@@ -1,10 +1,11 @@
 import type { ClaimResult } from "../../result/result.js";
 import { size } from "../../result/words.js";
+import { stepsPerOrbit } from "../format.js";
 import { clean } from "../text.js";
 import { figureRows } from "./figures.js";
 import { plotsOf } from "./plot-sections.js";
 import { quoteOf } from "./quote.js";
-import { rungTables, stepsPerOrbit } from "./rung-tables.js";
+import { rungTables } from "./rung-tables.js";
 import { setupRows, sourceRows } from "./setup-rows.js";
 import { template } from "./templates.js";
 import { typeset } from "./typeset.js";

@@ -1,5 +1,6 @@
 import type { ClaimResult, Ladder, Rung } from "../../result/result.js";
-import { figure, size } from "../../result/words.js";
+import { size } from "../../result/words.js";
+import { apart, blanks, grouped, shown, stepsPerOrbit } from "../format.js";
 import { typeset } from "./typeset.js";
 import { STATUS_WORDS } from "./words.js";
 
@@ -18,6 +19,8 @@ export interface RungTable {
 interface RungRow {
   readonly steps: string;
   readonly figure: string;
+  /** Left blank behind the figure, to set the points of the column in line. */
+  readonly blank: string;
   readonly apart: string;
   readonly null: string;
   readonly standardError: string;
@@ -33,24 +36,32 @@ interface RungRow {
 export function rungTables({ ladders, claimed, best }: ClaimResult): readonly RungTable[] {
   if (claimed === null) return [];
   const own = (ladder: Ladder): number => (ladder.role === "solution" ? 0 : 1);
-  return ladders
-    .toSorted((a, b) => own(a) - own(b))
-    .map((ladder) => ({
-      method: ladder.method,
-      role: ladder.role === "solution" ? "the author's method" : "witness",
-      says: typeset(ladder.says),
-      limit: limitOf(ladder),
-      orders: ordersOf(ladder, claimed.unit),
-      isSolution: ladder.role === "solution",
-      hasNull: ladder.rungs.some((rung) => rung.null !== null),
-      rows: ladder.rungs.map((rung, k) =>
-        rowOf(rung, {
-          fine: Math.max(ladder.floor ?? 0, rung.standardError ?? 0, claimed.halfWidth / 1000),
-          best: best.value,
-          inWindow: ladder.window !== null && k >= ladder.window[0] && k <= ladder.window[1],
-        }),
-      ),
-    }));
+  return ladders.toSorted((a, b) => own(a) - own(b)).map((ladder) => tableOf(ladder, claimed, best.value));
+}
+
+function tableOf(
+  ladder: Ladder,
+  claimed: NonNullable<ClaimResult["claimed"]>,
+  best: number | null,
+): RungTable {
+  const rows = ladder.rungs.map((rung, k) =>
+    rowOf(rung, {
+      fine: Math.max(ladder.floor ?? 0, rung.standardError ?? 0, claimed.halfWidth / 1000),
+      best,
+      inWindow: ladder.window !== null && k >= ladder.window[0] && k <= ladder.window[1],
+    }),
+  );
+  const behind = blanks(rows.map((row) => row.figure));
+  return {
+    method: ladder.method,
+    role: ladder.role === "solution" ? "the author's method" : "witness",
+    says: typeset(ladder.says),
+    limit: limitOf(ladder),
+    orders: ordersOf(ladder, claimed.unit),
+    isSolution: ladder.role === "solution",
+    hasNull: ladder.rungs.some((rung) => rung.null !== null),
+    rows: rows.map((row, k) => ({ ...row, blank: behind[k]! })),
+  };
 }
 
 function ordersOf(
@@ -70,9 +81,7 @@ function ordersOf(
 const limitOf = ({ extrapolated }: Ladder): string =>
   extrapolated === null
     ? "no limit"
-    : typeset(
-        `limit ${figure(extrapolated.value, extrapolated.halfWidth)} ± ${size(extrapolated.halfWidth)}`,
-      );
+    : typeset(`limit ${shown(extrapolated.value, extrapolated.halfWidth)} ± ${size(extrapolated.halfWidth)}`);
 
 interface RowContext {
   readonly fine: number;
@@ -80,16 +89,16 @@ interface RowContext {
   readonly inWindow: boolean;
 }
 
-function rowOf(rung: Rung, { fine, best, inWindow }: RowContext): RungRow {
+function rowOf(rung: Rung, { fine, best, inWindow }: RowContext): Omit<RungRow, "blank"> {
   const small = (value: number | null): string => (value === null ? "" : typeset(size(value)));
   return {
     steps: stepsPerOrbit(rung.stepsPerOrbit),
-    figure: rung.figure === null ? "" : typeset(figure(rung.figure, fine)),
-    apart: rung.figure === null || best === null ? "" : small(rung.figure - best),
+    figure: rung.figure === null ? "" : typeset(shown(rung.figure, fine)),
+    apart: typeset(apart(rung.figure, best)),
     null: small(rung.null),
     standardError: small(rung.standardError),
     stateDifference: small(rung.stateDifference),
-    evaluations: String(rung.evaluations),
+    evaluations: grouped(rung.evaluations, "\u202f"),
     seconds: rung.seconds < 0.001 ? "< 0.001" : rung.seconds.toFixed(3),
     isAuthors: rung.isAuthors,
     note: [
@@ -99,6 +108,3 @@ function rowOf(rung: Rung, { fine, best, inWindow }: RowContext): RungRow {
     ].join(", "),
   };
 }
-
-/** Steps an orbit to four digits. */
-export const stepsPerOrbit = (steps: number): string => String(Number(steps.toPrecision(4)));

@@ -1,5 +1,5 @@
 import type { ClaimResult } from "../../result/result.js";
-import { stepsPerOrbit } from "./rung-tables.js";
+import { stepsPerOrbit } from "../format.js";
 import { typeset } from "./typeset.js";
 
 interface Row {
@@ -45,5 +45,5 @@ const formOf = ({ equations }: NonNullable<ClaimResult["setup"]>): string =>
 export function sourceRows({ setup }: ClaimResult): readonly Row[] {
   if (setup === null) return [];
   const methods = setup.method === null ? setup.witnesses : [setup.method, ...setup.witnesses];
-  return [setup.equations, ...methods].map(({ name, source }) => ({ name, value: source }));
+  return [setup.equations, ...methods].map(({ name, source }) => ({ name, value: typeset(source) }));
 }

@@ -1,5 +1,6 @@
 import type { ClaimResult } from "../../../result/result.js";
-import { figure, size as inWords } from "../../../result/words.js";
+import { size as inWords } from "../../../result/words.js";
+import { shown } from "../../format.js";
 import { typeset } from "../typeset.js";
 import { axes, linearTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
@@ -82,7 +83,7 @@ function axis(
   const domain: Domain = [low - pad, high + pad];
   const isInside = ({ value }: Row): boolean => value >= domain[0] && value <= domain[1];
   const fine = Math.max(best.halfWidth ?? 0, claimed!.halfWidth / 20);
-  const written = ({ value }: Row): string => typeset(figure(value, fine));
+  const written = ({ value }: Row): string => typeset(shown(value, fine));
   const list = rows
     .map((row) => `${row.name} ${written(row)}${row.half > 0 ? ` ± ${typeset(inWords(row.half))}` : ""}`)
     .join(", ");

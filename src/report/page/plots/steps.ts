@@ -1,5 +1,6 @@
 import type { ClaimResult } from "../../../result/result.js";
-import { figure, size as inWords } from "../../../result/words.js";
+import { size as inWords } from "../../../result/words.js";
+import { shown } from "../../format.js";
 import { typeset } from "../typeset.js";
 import { axes, linearTicks, rungTicks } from "./axes.js";
 import { clip } from "./clip.js";
@@ -106,10 +107,10 @@ function curve(plot: Plot, { points, ink, dash, symbol }: Series, { x, y }: Step
 
 function alternative({ ladders, claimed, best }: ClaimResult, { series }: StepsView): string {
   const fine = Math.max(claimed!.halfWidth / 20, best.halfWidth ?? 0);
-  const ends = series.map(({ label, points }) => `${label} ${figure(points.at(-1)!.value, fine)}`).join(", ");
+  const ends = series.map(({ label, points }) => `${label} ${shown(points.at(-1)!.value, fine)}`).join(", ");
   const rung = ladders.find(({ role }) => role === "solution")?.rungs.find(({ isAuthors }) => isAuthors);
   const there = [
-    ...(rung?.value == null ? [] : [`raw figure ${figure(rung.value, fine)}`]),
+    ...(rung?.value == null ? [] : [`raw figure ${shown(rung.value, fine)}`]),
     ...(rung?.null == null ? [] : [`null run ${inWords(rung.null)}`]),
   ].join(", ");
   const authors = there === "" ? "" : ` At the author's step: ${there}.`;
