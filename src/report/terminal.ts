@@ -1,6 +1,7 @@
 import { styleText } from "node:util";
 import type { Check, ClaimResult, Ladder, Outcome, Rung, Verdict } from "../result/result.js";
-import { figure, size } from "../result/words.js";
+import { size, steps } from "../result/words.js";
+import { apart, asWritten, bestShown, blanks, margin, shown, stepsPerOrbit } from "./format.js";
 import { clean, columns, cut, padEnd, padStart, wrap } from "./text.js";
 
 export interface TerminalOptions {
@@ -77,9 +78,11 @@ export function digitsInWords({ digits, claimed, verdict }: ClaimResult): string
 function heading(result: ClaimResult, width: number, paint: Paint): string[] {
   const word = VERDICT_WORDS[result.verdict];
   const grade = result.grade === null ? "" : `grade ${result.grade}`;
-  const rest = [grade, digitsInWords(result)].filter(Boolean).join("   ");
+  const rest = [grade, digitsInWords(result)].filter(Boolean);
+  const isOneLine = [word, ...rest].join("   ").length <= width;
+  const painted = paint(VERDICT_STYLES[result.verdict], word);
   return [
-    `${paint(VERDICT_STYLES[result.verdict], word)}${rest === "" ? "" : `   ${rest}`}`,
+    ...(isOneLine ? [[painted, ...rest].join("   ")] : [painted, ...rest]),
     cut(clean(result.title), width),
     ...(result.title === result.file ? [] : [paint("dim", cut(clean(result.file), width))]),
   ];
@@ -88,40 +91,50 @@ function heading(result: ClaimResult, width: number, paint: Paint): string[] {
 function figures({ claimed, asSolved, crossReading, best, setup }: ClaimResult, width: number): string[] {
   if (claimed === null) return [];
   const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
-  const number = (value: number | null): string => (value === null ? "none" : figure(value, fine));
+  const number = (value: number | null): string => (value === null ? "none" : shown(value, fine));
+  const half = (value: number | null): string => (value === null ? "" : `± ${size(value)}`);
   const baseline = claimed.baseline === "subtracted" ? "less its null run" : "baseline included";
-  const how =
-    setup?.method == null
-      ? "no solution given"
-      : `${setup.method.name}, ${clean(setup.step ?? "")}${/orbit/.test(setup.step ?? "") ? "" : ` (${Math.round(setup.stepsPerOrbit ?? 0)} steps an orbit)`}`;
-  const rows: [string, string, string, string][] = [
-    ["claimed", String(claimed.value), `± ${size(claimed.halfWidth)}`, `${claimed.unit}, ${baseline}`],
-    ["as solved", number(asSolved.value), "", how],
-    ["null run", number(asSolved.null), "", "the same with the effect switched off"],
+  const rows = [
+    ["claimed", asWritten(claimed), `± ${margin(claimed)}`, `${clean(claimed.unit)}, ${baseline}`],
+    ["as solved", number(asSolved.value), "", howSolved(setup)],
+    [
+      "null run",
+      number(asSolved.null),
+      "",
+      setup?.method == null ? "no solution given" : "the effect switched off",
+    ],
     ...(crossReading === null
       ? []
       : [
           [
             "by the vector",
-            figure(crossReading.value, crossReading.halfWidth / 100),
-            `± ${size(crossReading.halfWidth)}`,
-            "drift of the eccentricity vector, end less start",
-          ] as [string, string, string, string],
+            shown(crossReading.value, crossReading.halfWidth / 100),
+            half(crossReading.halfWidth),
+            "eccentricity vector, end less start",
+          ],
         ]),
     [
       "best value",
-      best.value === null ? "none" : figure(best.value, best.halfWidth ?? 0),
-      best.halfWidth === null ? "" : `± ${size(best.halfWidth)}`,
+      best.value === null ? "none" : bestShown(best.value, best.halfWidth, claimed),
+      half(best.halfWidth),
       best.from === null ? "" : `by ${best.from}`,
     ],
     [
       "error",
       asSolved.error === null ? "none" : size(asSolved.error),
-      asSolved.halfWidth === null ? "" : `± ${size(asSolved.halfWidth)}`,
+      half(asSolved.halfWidth),
       "as solved less best",
     ],
   ];
-  return table(rows, ["left", "right", "left", "left"], width);
+  return table(inLine(rows, [1]), ["left", "right", "left", "left"], width);
+}
+
+function howSolved(setup: ClaimResult["setup"]): string {
+  if (setup?.method == null) return "no solution given";
+  const { method, step, stepsPerOrbit: perOrbit } = setup;
+  const isPerOrbit = step !== null && /orbit/.test(step);
+  const count = perOrbit === null || isPerOrbit ? [] : [steps(perOrbit)];
+  return [method.name, ...(step === null ? [] : [clean(step)]), ...count].join(", ");
 }
 
 function checks(list: readonly Check[], width: number, paint: Paint): string[] {
@@ -138,16 +151,16 @@ function ladder({ ladders, best, claimed }: ClaimResult, width: number, paint: P
   const own = ladders.find(({ role }) => role === "solution") ?? ladders[0];
   if (own === undefined || claimed === null) return [];
   const rows = own.rungs.map((rung): string[] => [
-    `${rung.isAuthors ? "> " : "  "}${rung.stepsPerOrbit.toPrecision(4).replace(/\.0+$/, "")}`,
-    rung.figure === null ? rung.status : figure(rung.figure, claimed.halfWidth / 100),
-    rung.figure === null || best.value === null ? "" : size(rung.figure - best.value),
+    `${rung.isAuthors ? "> " : "  "}${stepsPerOrbit(rung.stepsPerOrbit)}`,
+    rung.figure === null ? rung.status : shown(rung.figure, claimed.halfWidth / 100),
+    apart(rung.figure, best.value),
     rung.null === null ? "" : size(rung.null),
     inWindow(own, rung) ? "window" : "",
   ]);
   return [
-    ...wrap(`Ladder of ${own.method}. ${clean(own.says)}`, width),
+    ...wrap(`Ladder of ${clean(own.method)}. ${clean(own.says)}`, width),
     ...table(
-      [["  steps/orbit", "figure", "less best", "null run", ""], ...rows],
+      [["  steps/orbit", "figure", "less best", "null run", ""], ...inLine(rows, [1, 2, 3])],
       ["right", "right", "right", "right", "left"],
       width,
     ).map((line, i) => (i === 0 ? paint("dim", line) : line)),
@@ -164,8 +177,8 @@ function remedy({ remedy: found }: ClaimResult, width: number): string[] {
   const rows = found.options
     .slice(0, 4)
     .map(({ method, step, relativeCost, basis }) => [
-      `  ${method}`,
-      step,
+      `  ${clean(method)}`,
+      clean(step),
       `${size(relativeCost)} times the evaluations`,
       basis,
     ]);
@@ -179,8 +192,26 @@ function footer({ gradeRule, grade }: ClaimResult, { page, width }: TerminalOpti
       "This judges numerics only; it is no clearance for flight, navigation or conjunction work.",
       width,
     ),
-    ...(page === undefined ? [] : [`report  ${page}`]),
+    // A path is not broken: cut or in two it could not be opened. It has the line to itself where it is long.
+    ...(page === undefined ? [] : where(clean(page), width)),
   ];
+}
+
+function where(page: string, width: number): string[] {
+  const line = `report  ${page}`;
+  return columns(line) <= width ? [line] : ["report", page];
+}
+
+/** Rows in which the numbers of some columns have their points in line. */
+function inLine(rows: readonly (readonly string[])[], numeric: readonly number[]): string[][] {
+  const set = rows.map((row) => [...row]);
+  for (const i of numeric) {
+    const behind = blanks(rows.map((row) => row[i] ?? ""));
+    set.forEach((row, k) => {
+      row[i] = `${row[i] ?? ""}${" ".repeat(behind[k]!.length)}`;
+    });
+  }
+  return set;
 }
 
 /** Aligned columns, cut at the width. */
