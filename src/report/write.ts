@@ -52,22 +52,38 @@ export function removeUnfinished(): void {
   for (const path of unfinished) rmSync(path, { force: true });
 }
 
+/** Bytes of a stem: with number, ending and the dress of a temporary name it stays under the 255 of a name. */
+const LONGEST = 180;
+
 /**
  * File names for pages, one a claim: the claim's own name without its ending, with a number where two would
- * be the same.
+ * be the same, also on file systems that tell no case or composed letters apart.
  */
 export function pageNames(files: readonly string[]): string[] {
   const taken = new Set(["index"]);
   return files.map((file) => {
     const stem =
-      basename(file)
-        .replace(/\.(ya?ml|json)$/i, "")
-        .replaceAll(/[^\p{L}\p{N}._-]+/gu, "-")
-        .replace(/^[.-]+/, "")
-        .slice(0, 80) || "claim";
+      shortened(
+        basename(file)
+          .normalize("NFC")
+          .replace(/\.(ya?ml|json)$/i, "")
+          .replaceAll(/[^\p{L}\p{M}\p{N}._-]+/gu, "-")
+          .replace(/^[.-]+/, ""),
+      ) || "claim";
     let name = stem;
-    for (let k = 2; taken.has(name.toLowerCase()); k++) name = `${stem}-${k}`;
-    taken.add(name.toLowerCase());
+    for (let k = 2; taken.has(folded(name)); k++) name = `${stem}-${k}`;
+    taken.add(folded(name));
     return `${name}.html`;
   });
+}
+
+const folded = (name: string): string => name.normalize("NFKC").toLowerCase();
+
+function shortened(name: string): string {
+  let kept = "";
+  for (const character of name) {
+    if (Buffer.byteLength(kept + character) > LONGEST) break;
+    kept += character;
+  }
+  return kept;
 }
