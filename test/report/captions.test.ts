@@ -230,6 +230,14 @@ describe("the other captions", () => {
     expect(ledgerCaption(entry)).toBe(
       "The energy drifts. Largest relative change 1.00e-8, -1.00e-10 an orbit. It goes as the step to the power of 5.00.",
     );
+    // A vector's curve rises while the vector shrinks.
+    const vector = { ...entry, series: { orbits: [0, 1], change: [0, 1e-8] } };
+    expect(ledgerCaption(vector)).toContain("-1.00e-10 an orbit. The curve is the size of the change");
+    const falling = { ...entry, series: { orbits: [0, 1], change: [0, -1e-8] } };
+    expect(ledgerCaption(falling)).not.toContain("The curve");
+    // Where the swing within an orbit is drawn and not counted.
+    const swinging = { ...entry, series: { orbits: [0, 1, 2], change: [0, -3e-8, -1e-8] } };
+    expect(ledgerCaption(swinging)).toContain("Largest relative change of the orbits' means 1.00e-8");
     expect(ledgerCaption({ ...entry, pattern: "bounded-oscillation", stepOrder: null })).toBe(
       "The energy drifts. Largest relative change 1.00e-8.",
     );

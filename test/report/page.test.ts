@@ -112,7 +112,9 @@ describe("the page", () => {
       expect(html, name).not.toMatch(/\b(src|href|xlink:href)="(?!#)/);
       expect(html, name).not.toMatch(/url\((?!#)|@import/);
       const policy = document.querySelector("meta[http-equiv]")!.getAttribute("content")!;
-      expect(policy).toMatch(/^default-src 'none'; style-src 'unsafe-inline'; img-src data:;/);
+      expect(policy).toMatch(
+        /^default-src 'none'; style-src 'unsafe-inline'; base-uri 'none'; form-action 'none'$/,
+      );
     }
   });
 
@@ -123,6 +125,21 @@ describe("the page", () => {
       expect(html, name).toContain("no clearance for flight, navigation or conjunction work");
       expect(html, name).toContain("licensed practice");
     }
+  });
+
+  it("writes no limit as nought that is not", async () => {
+    const result = sample("mercury-subtracted");
+    const [own, ...others] = result.ladders;
+    const loose = { ...own!, extrapolated: { value: 57.92365, halfWidth: 411.4 } };
+    const html = await renderPage({ ...result, ladders: [loose, ...others] });
+    expect(open(html).querySelector("summary small")!.textContent).toContain("limit 57.9 ±\u00a0411");
+  });
+
+  it("promises no null run where nothing can be switched off", async () => {
+    const heading = async (name: string) =>
+      open(await renderPage(sample(name))).querySelector("#effect")!.textContent;
+    expect(await heading("demo")).toBe("With the effect switched off");
+    expect(await heading("leapfrog-kepler")).toBe("The figure against the step");
   });
 
   it("is the same for the same result, whatever was drawn before", async () => {
@@ -239,6 +256,16 @@ describe("the plots", () => {
     expect(await steps("demo")).not.toContain("difference");
     // Nothing can be switched off on a Kepler orbit: one curve.
     expect(await steps("leapfrog-kepler")).not.toContain("null run");
+  });
+
+  it("tick the finest rung where there are only witnesses", async () => {
+    const result = sample("text-only");
+    const finest = Math.max(
+      ...result.ladders.flatMap(({ rungs }) => rungs.map((rung) => rung.stepsPerOrbit)),
+    );
+    const document = open(await renderPage(result));
+    const ladder = document.querySelector("svg[aria-labelledby^=ladder-wide]")!;
+    expect([...ladder.querySelectorAll("text")].map((text) => text.textContent)).toContain(String(finest));
   });
 
   it("zoom in where the whole would hide the margin", async () => {

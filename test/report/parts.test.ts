@@ -15,6 +15,7 @@ describe("typeset", () => {
     expect(typeset("(GM/(c^2 r))^2")).toBe("(GM/(c² r))²");
     expect(typeset("dormand-prince-8 at -433 arcsec")).toBe("dormand-prince-8 at −433 arcsec");
     expect(typeset("eqs. 219-220, rk4")).toBe("eqs. 219-220, rk4");
+    expect(typeset("8.80 % and 2 ± 1e-3")).toBe(`8.80${nb}% and 2 ±${nb}1${nb}×${nb}10⁻³`);
     expect(typeset("0x1e5 and 1e5x")).toBe("0x1e5 and 1e5x");
   });
 

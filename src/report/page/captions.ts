@@ -182,12 +182,19 @@ function bend({ number, angle }: PassageSeries): number {
   );
 }
 
-export function ledgerCaption({ says, largest, perOrbit, pattern, stepOrder }: LedgerEntry): string {
+export function ledgerCaption(entry: LedgerEntry): string {
+  const { says, largest, perOrbit, pattern, stepOrder, series } = entry;
   const isDrifting =
     pattern === "linear-drift" || pattern === "faster-growth" || pattern === "jumps-at-periapsis";
+  // Where what swings within an orbit is left out, the curve goes beyond the figure.
+  const drawn = Math.max(0, ...series.change.map(Math.abs));
+  const ofMeans = drawn > 1.01 * largest;
+  // A vector is drawn by the size of its change, which cannot fall.
+  const isSize = isDrifting && perOrbit < 0 && drawn > 0 && series.change.every((change) => change >= 0);
   return sentences(
     says,
-    `Largest relative change ${size(largest)}${isDrifting ? `, ${size(perOrbit)} an orbit` : ""}.`,
+    `Largest relative change ${ofMeans ? "of the orbits' means " : ""}${size(largest)}${isDrifting ? `, ${size(perOrbit)} an orbit` : ""}.`,
+    isSize ? "The curve is the size of the change, whichever way it goes." : "",
     stepOrder === null ? "" : `It goes as the step to the power of ${stepOrder.toFixed(2)}.`,
   );
 }

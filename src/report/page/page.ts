@@ -32,6 +32,7 @@ export async function renderPage(result: ClaimResult): Promise<string> {
     unit: clean(claimed?.unit ?? ""),
     figures: figureRows(result),
     plots,
+    effect: effectOf(result),
     remedy: remedyOf(result),
     checks: checkRows(result),
     ladders: rungTables(result),
@@ -50,6 +51,15 @@ export async function renderPage(result: ClaimResult): Promise<string> {
 
 const quantityOf = ({ quantity, baseline }: NonNullable<ClaimResult["claimed"]>): string =>
   `${spaced(quantity)} as claimed${baseline === "subtracted" ? ", a null run taken off" : ""}`;
+
+/** On a problem without an effect the null run is the run itself. */
+function effectOf({ ladders, passages }: ClaimResult): object {
+  const own = ladders.find(({ role }) => role === "solution");
+  const isTold = own?.rungs.some((rung) => rung.null !== null && rung.null !== rung.value) ?? false;
+  return isTold || (own === undefined && passages?.null != null)
+    ? { heading: "With the effect switched off", link: "Null run" }
+    : { heading: "The figure against the step", link: "Steps" };
+}
 
 function checkRows({ checks }: ClaimResult): object[] {
   const small = (value: number | null): string => (value === null ? "" : typeset(size(value)));

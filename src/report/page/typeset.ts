@@ -18,7 +18,7 @@ export const superscript = (exponent: number): string =>
 
 /**
  * A sentence of ours with its numbers set as on paper: `1.15e-8` as 1.15 × 10⁻⁸, `c^2` as c², a minus sign for a hyphen
- * before a digit. Not for what the claim says in its own words.
+ * before a digit, no break between a number and its sign. Not for what the claim says in its own words.
  */
 export function typeset(sentence: string): string {
   return sentence
@@ -27,7 +27,8 @@ export function typeset(sentence: string): string {
       (_, mantissa: string, exponent: string) => `${mantissa}\u00a0×\u00a010${superscript(Number(exponent))}`,
     )
     .replaceAll(/\^(-?\d+)/g, (_, exponent: string) => superscript(Number(exponent)))
-    .replaceAll(/(?<![\w.)-])-(?=\d)/g, "−");
+    .replaceAll(/(?<![\w.)-])-(?=\d)/g, "−")
+    .replaceAll(/(?<=\d) (?=%)|(?<=±) (?=\d)/g, "\u00a0");
 }
 
 /** A power of ten on an axis: 10⁻³; the plain number where that is as short. */

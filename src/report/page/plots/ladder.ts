@@ -43,7 +43,7 @@ export function ladderPlot(canvas: Canvas, result: ClaimResult): string | null {
     says: alternative(lines, what),
     build: (plot, size) => {
       const isWide = size === "wide";
-      const steps = (own ?? lines[0]!.ladder).rungs.map(({ stepsPerOrbit }) => stepsPerOrbit);
+      const steps = own === null ? everyStep(lines) : own.rungs.map(({ stepsPerOrbit }) => stepsPerOrbit);
       return {
         height: HEIGHT[size],
         marginLeft: 46,
@@ -69,6 +69,12 @@ export function ladderPlot(canvas: Canvas, result: ClaimResult): string | null {
     },
   });
 }
+
+/** Steps an orbit at which any method has a rung. */
+const everyStep = (lines: readonly Line[]): number[] =>
+  [...new Set(lines.flatMap(({ ladder }) => ladder.rungs.map(({ stepsPerOrbit }) => stepsPerOrbit)))].sort(
+    (a, b) => a - b,
+  );
 
 const HEIGHT: Readonly<Record<Size, number>> = { wide: 430, narrow: 360 };
 

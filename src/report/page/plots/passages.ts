@@ -8,16 +8,23 @@ import { spread } from "./labels.js";
 /** The apsidal angle from passage to passage, less whole turns, of the author's run and its null run. */
 export function passagesPlot(canvas: Canvas, { passages, claimed }: ClaimResult): string | null {
   if (passages === null || claimed === null || passages.solution.number.length < 2) return null;
-  const line = (label: string, { number, angle }: PassageSeries, ink: string, dash: string) => ({
+  const line = (
+    label: string,
+    { number, angle }: PassageSeries,
+    ink: string,
+    dash: string,
+    symbol: "circle" | "triangle",
+  ) => ({
     label,
     ink,
     dash,
+    symbol,
     number: thin(number),
     angle: thin(angle),
   });
   const lines = [
-    line("solution", passages.solution, "var(--own)", ""),
-    ...(passages.null === null ? [] : [line("null run", passages.null, "var(--null)", "5 3")]),
+    line("solution", passages.solution, "var(--own)", "", "circle"),
+    ...(passages.null === null ? [] : [line("null run", passages.null, "var(--null)", "5 3", "triangle")]),
   ];
   const angles = lines.flatMap(({ angle }) => angle);
   const low = Math.min(0, ...angles);
@@ -66,13 +73,25 @@ export function passagesPlot(canvas: Canvas, { passages, claimed }: ClaimResult)
               strokeDasharray: dash,
             }),
           ),
+          ...lines
+            .filter(({ number }) => number.length <= FEW)
+            .map(({ number, angle, ink, symbol }) =>
+              plot.dot(number, {
+                x: [...number],
+                y: [...angle],
+                symbol,
+                r: 3.4,
+                fill: symbol === "circle" ? ink : "var(--paper)",
+                stroke: ink,
+              }),
+            ),
           ...lines.map(({ label, ink }, k) =>
             plot.text([label], {
               x: last,
               y: y[0] + places[k]! * (y[1] - y[0]),
               text: [label],
               textAnchor: "start",
-              dx: 7,
+              dx: 10,
               fill: ink,
               fontWeight: "bold",
             }),
@@ -83,6 +102,8 @@ export function passagesPlot(canvas: Canvas, { passages, claimed }: ClaimResult)
   });
 }
 
+/** So many passages can be marked one by one. */
+const FEW = 40;
 /** More points than this are not told apart at the widest. */
 const MOST = 400;
 
