@@ -1,3 +1,4 @@
+import type { LoopStyle } from "./arithmetic.js";
 import type { Code, Expression } from "./code.js";
 
 /** What a family needs to write the body of its step. */
@@ -14,6 +15,9 @@ export interface StepContext {
    * @returns a value for each coordinate's acceleration: a name, or a number
    */
   accelerate(code: Code, prefix: string, bind: (state: string) => Expression): Expression[];
+  /** Defines `name` as what `state` becomes when `increment` is added to its value `from`. */
+  move(code: Code, name: string, state: string, from: Expression, increment: Expression): void;
+  readonly style: LoopStyle;
 }
 
 /**

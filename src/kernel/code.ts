@@ -1,14 +1,16 @@
+import type { DoubleDouble } from "../arithmetic/double-double.js";
 import type { FunctionName } from "../formula/graph.js";
 
 /**
  * Loop code as a tree, printed as text or encoded for WebAssembly with the same operations in the same
- * order. A name that begins with `#` is a counter, an integer; all else are doubles. Counters, and names that
+ * order. A name that begins with `#` is a counter, an integer; all else are doubles, of which a constant may be
+ * given to twice the digits: where doubles are meant its high part counts. Counters, and names that
  * begin with `$`, are one for all runs that a loop steps side by side; any other has a value for each.
  */
-export type Expression = string | number | Operation | Load;
+export type Expression = string | number | DoubleDouble | Operation | Load;
 
 export interface Operation {
-  readonly op: "add" | "subtract" | "multiply" | "divide" | "negate" | "power" | FunctionName;
+  readonly op: "add" | "subtract" | "multiply" | "divide" | "negate" | "power" | FunctionName | "rest";
   readonly args: readonly Expression[];
 }
 
@@ -88,6 +90,7 @@ export class Code {
 
 export const plus = (...args: readonly Expression[]): Expression =>
   args.reduce((sum, term) => ({ op: "add", args: [sum, term] }));
+export const minus = (a: Expression, b: Expression): Expression => ({ op: "subtract", args: [a, b] });
 export const times = (a: Expression, b: Expression): Expression => ({ op: "multiply", args: [a, b] });
 export const compare = (a: Expression, sign: Comparison["compare"], b: Expression): Comparison => ({
   compare: sign,
@@ -95,7 +98,7 @@ export const compare = (a: Expression, sign: Comparison["compare"], b: Expressio
 });
 
 /** Sum of coefficient times value, left to right, without the terms of coefficient zero. */
-export function weightedSum(coefficients: readonly number[], values: readonly Expression[]): Expression {
+export function weightedSum(coefficients: readonly Expression[], values: readonly Expression[]): Expression {
   const terms = coefficients.flatMap((coefficient, i): Expression[] => {
     if (coefficient === 0) return [];
     return [coefficient === 1 ? values[i]! : times(coefficient, values[i]!)];

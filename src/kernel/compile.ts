@@ -1,17 +1,23 @@
 import type { MethodDefinition } from "../methods/definition.js";
+import { type LoopArithmetic, styles } from "./arithmetic.js";
+import { inSingle } from "./single.js";
 import type { StepLoop } from "./step-loop.js";
 import type { CompiledSystem } from "./system.js";
 import { print } from "./text.js";
 import { one } from "./wasm/instructions.js";
 import { compileModule } from "./wasm/module.js";
-import { MOST_STEPS, writeLoop } from "./write-loop.js";
+import { MOST_STEPS, type WrittenLoop, writeLoop } from "./write-loop.js";
 
 /**
  * Compiles the step loop of a method over a system, to WebAssembly: as fast as warm JavaScript of the same
  * operations, and from the first step on, where JavaScript is interpreted for some thousands.
  */
-export function compileStepLoop(system: CompiledSystem, method: MethodDefinition): StepLoop {
-  const { code, body } = writeLoop(system, method);
+export function compileStepLoop(
+  system: CompiledSystem,
+  method: MethodDefinition,
+  arithmetic: LoopArithmetic = "double",
+): StepLoop {
+  const { code, body } = loopIn(system, method, arithmetic);
   const dimension = system.states.length;
   const ioLength = 2 * dimension + 3;
   const count = system.parameters.length;
@@ -32,12 +38,22 @@ export function compileStepLoop(system: CompiledSystem, method: MethodDefinition
   };
 }
 
+function loopIn(system: CompiledSystem, method: MethodDefinition, arithmetic: LoopArithmetic): WrittenLoop {
+  const written = writeLoop(system, method, styles[arithmetic]);
+  return arithmetic === "single" ? { ...written, code: inSingle(written.code) } : written;
+}
+
 /**
  * The same loop as a C function `int NAME(double *io, const double *parameters, double step, int steps)`, for
  * a file that includes math.h. It leaves the same bits where formulas keep to + - * / and square roots; in
  * other functions libraries differ.
  */
-export function stepLoopInC(system: CompiledSystem, method: MethodDefinition, name: string): string {
+export function stepLoopInC(
+  system: CompiledSystem,
+  method: MethodDefinition,
+  name: string,
+  arithmetic: LoopArithmetic = "double",
+): string {
   const head = `int ${name}(double *io, const double *parameters, double step, int steps)`;
-  return `${head} {\n${print(writeLoop(system, method).code, "c")}\n}\n`;
+  return `${head} {\n${print(loopIn(system, method, arithmetic).code, "c")}\n}\n`;
 }

@@ -1,7 +1,7 @@
 import type { Node } from "../formula/graph.js";
-import { nearestDouble } from "../formula/nearest-double.js";
 import { fold } from "../formula/walk.js";
 import type { Code, Expression } from "./code.js";
+import { numberNode } from "./constants.js";
 
 /**
  * Writes expressions as single assignments, each shared node once.
@@ -22,7 +22,7 @@ export function writeExpressions(
     fold<Expression>(
       node,
       (n, args) => {
-        if (n.op === "number") return nearestDouble(n.value!);
+        if (n.op === "number") return numberNode(n);
         if (n.op === "symbol") return bind(n.name!);
         const name = `${prefix}${n.id}`;
         code.define(name, { op: n.op, args });

@@ -1,31 +1,28 @@
-import { evaluateConstant } from "../formula/constant.js";
+import { toDouble } from "../arithmetic/double-double.js";
 import type { Coefficient, ImplicitRungeKutta } from "../methods/definition.js";
 import { next, type StepBody, type StepContext } from "./body.js";
 import { Code, compare, type Expression, plus, times, weightedSum } from "./code.js";
-
-/** Sweeps after which a step that still changes is given up. */
-const MOST_SWEEPS = 60;
-/** A change no smaller than the last counts as rounding only below this part of the accelerations. */
-const ROUNDING = 1e-13;
+import { constant, preciseConstant } from "./constants.js";
 
 /**
  * Stages of q'' = a(q, q') by fixed-point iteration on the stage accelerations K alone. With the stage rates
  * put in, q_i = q + h c_i v + h² Σ (A²)_ij K_j and v_i = v + h Σ a_ij K_j are the method's own stages.
  * Sweeps go on until nothing changes, or changes stop shrinking at the level of rounding (Hairer, Lubich and
- * Wanner, Geometric Numerical Integration, VIII.6). A step that gets there in no more than `MOST_SWEEPS`
+ * Wanner, Geometric Numerical Integration, VIII.6). A step that gets there in no more than `style.sweeps`
  * converged; one that does not sets the flag.
  *
  * The first guess is the polynomial through the last step's K, taken on; at a call's first step the
  * acceleration at its start.
  */
 export function implicitRungeKutta(method: ImplicitRungeKutta, context: StepContext): StepBody {
-  const { coordinates, rates } = context;
-  const a = method.a.map((row) => row.map(evaluateConstant));
-  const b = method.b.map(evaluateConstant);
-  const c = method.a.map((row) => evaluateConstant(row.map((entry) => `(${entry})`).join(" + ")));
+  const { coordinates, rates, style } = context;
+  const a = method.a.map((row) => row.map(constant));
+  const b = method.b.map(constant);
+  const sums = method.a.map((row) => row.map((entry) => `(${entry})`).join(" + "));
+  const c = sums.map(constant);
   const squared = method.a.map((row) => product(row, method.a));
   const last = product(method.b, method.a);
-  const onward = extrapolation(c);
+  const onward = extrapolation(sums.map((sum) => toDouble(preciseConstant(sum))));
   const stages = b.map((_, stage) => stage);
   const axes = coordinates.map((_, i) => i);
   const K = (i: number, stage: number): string => `K${stage}_${i}`;
@@ -74,11 +71,11 @@ export function implicitRungeKutta(method: ImplicitRungeKutta, context: StepCont
     // Of a sweep that still gains, the size is not asked.
     sweep.when(compare("change", ">=", "last"), (then) => {
       const size = plus(...stages.flatMap((stage) => axes.map((i) => absolute(K(i, stage)))));
-      then.when(compare("change", "<=", times(ROUNDING, size)), (within) => within.leave());
+      then.when(compare("change", "<=", times(style.rounding, size)), (within) => within.leave());
     });
     sweep.when(compare("change", "==", 0), (then) => then.leave());
     const giveUp = {
-      either: [compare("sweeps", "==", MOST_SWEEPS), compare("change", "!=", "change")],
+      either: [compare("sweeps", "==", style.sweeps), compare("change", "!=", "change")],
     } as const;
     sweep.when(giveUp, (then) => {
       then.set("failed", 1);
@@ -90,17 +87,17 @@ export function implicitRungeKutta(method: ImplicitRungeKutta, context: StepCont
   step.when(compare("failed", "==", 1), (then) => then.leave());
   coordinates.forEach((q, i) => {
     const drift = plus(rates[i]!, times("h", weightedSum(last, row(i))));
-    step.define(next(q), plus(q, times("h", drift)));
+    context.move(step, next(q), q, q, times("h", drift));
   });
   rates.forEach((v, i) => {
-    step.define(next(v), plus(v, times("h", weightedSum(b, row(i)))));
+    context.move(step, next(v), v, v, times("h", weightedSum(b, row(i))));
   });
   return { before, evaluationsBefore: 1, step, evaluationsPerStep: stages.length, implicit: true };
 }
 
 /** A row of coefficients times the matrix A, computed from the exact texts. */
-function product(row: readonly Coefficient[], a: readonly (readonly Coefficient[])[]): number[] {
-  return a.map((_, j) => evaluateConstant(row.map((entry, k) => `(${entry}) * (${a[k]![j]})`).join(" + ")));
+function product(row: readonly Coefficient[], a: readonly (readonly Coefficient[])[]): Expression[] {
+  return a.map((_, j) => constant(row.map((entry, k) => `(${entry}) * (${a[k]![j]})`).join(" + ")));
 }
 
 /** Weights of the Lagrange polynomials through the nodes c, taken at 1 + c_i. */

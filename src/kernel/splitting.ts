@@ -1,7 +1,7 @@
-import { evaluateConstant } from "../formula/constant.js";
 import type { Splitting } from "../methods/definition.js";
 import { next, type StepBody, type StepContext } from "./body.js";
-import { Code, type Expression, plus, times } from "./code.js";
+import { Code, type Expression, times } from "./code.js";
+import { constant } from "./constants.js";
 
 /**
  * Kicks and drifts in the order given. A kick at coordinates that have not moved since the last kick uses
@@ -25,11 +25,11 @@ export function splitting(method: Splitting, context: StepContext): StepBody {
   let evaluations = 0;
   const move = (state: string, stage: number, rate: Expression): void => {
     const moved = `${state}_${stage}`;
-    step.define(moved, plus(at(state), times(`w${stage}`, rate)));
+    context.move(step, moved, state, at(state), times(`w${stage}`, rate));
     names.set(state, moved);
   };
   method.stages.forEach((part, stage) => {
-    const weight = evaluateConstant("drift" in part ? part.drift : part.kick);
+    const weight = constant("drift" in part ? part.drift : part.kick);
     before.define(`w${stage}`, times(weight, "h"));
     if ("drift" in part) {
       coordinates.forEach((coordinate, i) => {

@@ -45,6 +45,7 @@ const IN_JAVASCRIPT: Readonly<Record<string, string>> = { power: "pow" };
 export function expression(value: Expression, dialect: Dialect, integer = false): string {
   if (typeof value === "string") return plain(value);
   if (typeof value === "number") return literal(value, dialect, integer);
+  if ("high" in value) return literal(value.high, dialect, false);
   if ("from" in value) return `${value.from}[${value.index}]`;
   const args = value.args.map((argument) => expression(argument, dialect, integer));
   const infix = INFIX[value.op];

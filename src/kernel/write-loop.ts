@@ -1,10 +1,12 @@
 import type { Node } from "../formula/graph.js";
 import type { MethodDefinition } from "../methods/definition.js";
+import { type LoopStyle, styles } from "./arithmetic.js";
 import { next, type StepBody, type StepContext } from "./body.js";
 import { Code, compare, type Expression, plus, times } from "./code.js";
 import { explicitRungeKutta } from "./explicit-runge-kutta.js";
 import { hoistParameters, writeExpressions } from "./expressions.js";
 import { implicitRungeKutta } from "./implicit-runge-kutta.js";
+import { compensatedMoves, plainMoves } from "./moves.js";
 import { splitting } from "./splitting.js";
 import type { CompiledSystem } from "./system.js";
 
@@ -17,7 +19,11 @@ export interface WrittenLoop {
 /** A counter has 32 bits. */
 export const MOST_STEPS = 2 ** 31 - 1;
 
-export function writeLoop(system: CompiledSystem, method: MethodDefinition): WrittenLoop {
+export function writeLoop(
+  system: CompiledSystem,
+  method: MethodDefinition,
+  style: LoopStyle = styles.double,
+): WrittenLoop {
   const { accelerations, radialRate } = system;
   const { names, coordinates, rates } = plainNames(system);
   const states = [...coordinates, ...rates];
@@ -44,12 +50,16 @@ export function writeLoop(system: CompiledSystem, method: MethodDefinition): Wri
   const write = (into: Code, nodes: readonly Node[], prefix: string, bind: (state: string) => Expression) =>
     writeExpressions(into, nodes, prefix, at(bind), new Map(hoisted));
 
+  const moves = style.compensated ? compensatedMoves(states) : plainMoves;
   const body = bodyOf(method, {
     coordinates,
     rates,
     velocityDependent: system.velocityDependent,
     accelerate: (into, prefix, bind) => write(into, accelerations, prefix, bind),
+    move: moves.move,
+    style,
   });
+  moves.before(code);
   code.append(body.before);
   if (body.implicit) code.variable("evaluations", body.evaluationsBefore);
 
@@ -75,6 +85,7 @@ export function writeLoop(system: CompiledSystem, method: MethodDefinition): Wri
     const passed = { both: [compare("before", "<", 0), compare("rate", ">=", 0)] } as const;
     loop.when({ either: [compare("#taken", "==", "#steps"), passed] }, (last) => finish(last, next));
     for (const state of states) loop.set(state, next(state));
+    moves.after(loop);
   });
   // Only a step that failed comes here.
   if (body.implicit) finish(code, (state) => state);

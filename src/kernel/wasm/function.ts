@@ -22,8 +22,13 @@ import {
 /** The body of a function of `$step` and `#steps`, and the functions of the mathematical library that it calls. */
 export interface EncodedFunction {
   readonly bytes: readonly number[];
-  /** By their index. */
-  readonly imports: readonly Operation["op"][];
+  /** By their index, with the number of doubles that they take. */
+  readonly imports: readonly Import[];
+}
+
+export interface Import {
+  readonly op: Operation["op"];
+  readonly takes: number;
 }
 
 /**
@@ -52,7 +57,7 @@ function namesOf(code: Code): Set<string> {
 }
 
 class Encoder {
-  readonly imports: Operation["op"][] = [];
+  readonly imports: Import[] = [];
   readonly bytes: number[] = [];
   readonly #set: Instructions;
   readonly #parametersAt: number;
@@ -141,6 +146,8 @@ class Encoder {
       this.#put(set.constant(value));
     } else if (typeof value === "string") {
       this.#name(value, set);
+    } else if ("high" in value) {
+      this.#put(set.constant(value.high));
     } else if ("from" in value) {
       const begin = value.from === "io" ? 0 : this.#parametersAt;
       this.#put(control.base);
@@ -164,8 +171,8 @@ class Encoder {
 
   /** A function of the library, once for each run. */
   #call({ op, args }: Operation, set: Instructions): void {
-    let index = this.imports.indexOf(op);
-    if (index < 0) index = this.imports.push(op) - 1;
+    let index = this.imports.findIndex((known) => known.op === op);
+    if (index < 0) index = this.imports.push({ op, takes: args.length }) - 1;
     for (let lane = 0; lane < set.lanes; lane++) {
       for (const argument of args) {
         this.#value(argument, set);

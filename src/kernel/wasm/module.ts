@@ -15,9 +15,8 @@ export interface Compiled {
 const MAGIC = [0x00, 0x61, 0x73, 0x6d, 0x01, 0x00, 0x00, 0x00];
 const PAGE = 65_536;
 const RUN = 0;
-/** Functions of the mathematical library, of one double and of two. */
-const OF_ONE = 1;
-const OF_TWO = 2;
+/** Most doubles that a function of the mathematical library takes. */
+const MOST_TAKEN = 4;
 const functionType = (takes: readonly number[], gives: number): number[] => [
   0x60,
   ...vector(takes.map((type) => [type])),
@@ -40,6 +39,7 @@ export function compileModule(
   set: Instructions,
   ioLength: number,
   parameters: number,
+  mathematics: Mathematics = ofDoubles,
 ): Compiled | null {
   const parametersAt = ioLength * set.lanes;
   const bytes = encodeModule(code, set, parametersAt, parameters);
@@ -52,7 +52,10 @@ export function compileModule(
   };
 }
 
-const mathematics: Readonly<Partial<Record<Operation["op"], unknown>>> = {
+/** Functions that the processor lacks. */
+export type Mathematics = Readonly<Partial<Record<Operation["op"], (...args: number[]) => number>>>;
+
+const ofDoubles: Mathematics = {
   power: Math.pow,
   sin: Math.sin,
   cos: Math.cos,
@@ -74,14 +77,12 @@ function encodeModule(code: Code, set: Instructions, parametersAt: number, param
       1,
       vector([
         functionType([double, integer.valueType], integer.valueType),
-        functionType([double], double),
-        functionType([double, double], double),
+        ...Array.from({ length: MOST_TAKEN + 1 }, (_, takes) =>
+          functionType(Array<number>(takes).fill(double), double),
+        ),
       ]),
     ),
-    ...section(
-      2,
-      vector(imports.map((name) => [...text("math"), ...text(name), 0, name === "power" ? OF_TWO : OF_ONE])),
-    ),
+    ...section(2, vector(imports.map(({ op, takes }) => [...text("math"), ...text(op), 0, RUN + 1 + takes]))),
     ...section(3, vector([[RUN]])),
     ...section(5, vector([[0, ...unsigned(pages)]])),
     ...section(

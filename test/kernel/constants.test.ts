@@ -2,13 +2,16 @@ import { Decimal } from "decimal.js";
 import fc from "fast-check";
 import Fraction from "fraction.js";
 import { describe, expect, it } from "vitest";
-import { evaluateConstant } from "../../src/formula/constant.js";
 import { exactDecimal } from "../../src/formula/decimal.js";
 import { Graph } from "../../src/formula/graph.js";
 import { nearestDouble } from "../../src/formula/nearest-double.js";
 import { FormulaError, parseFormula } from "../../src/formula/parse.js";
+import { preciseConstant } from "../../src/kernel/constants.js";
 import { methodsCatalog } from "../../src/methods/catalog/index.js";
-import { decimalValue, Exact } from "./in-decimal.js";
+import { decimalValue, Exact } from "../formula/in-decimal.js";
+
+/** The double of a coefficient, as loops take it. */
+const evaluateConstant = (text: string): number => preciseConstant(text).high;
 
 describe("the double nearest to a fraction", () => {
   // The language itself reads a decimal to the nearest double (ECMA-262, 7.1.4.1.1).
