@@ -1,10 +1,9 @@
-import type { Node } from "../formula/graph.js";
 import type { MethodDefinition } from "../methods/definition.js";
 import { type LoopStyle, styles } from "./arithmetic.js";
 import { next, type StepBody, type StepContext } from "./body.js";
-import { Code, compare, type Expression, plus, times } from "./code.js";
+import { type Code, compare, plus, times } from "./code.js";
 import { explicitRungeKutta } from "./explicit-runge-kutta.js";
-import { hoistParameters, writeExpressions } from "./expressions.js";
+import { openFrame } from "./frame.js";
 import { implicitRungeKutta } from "./implicit-runge-kutta.js";
 import { compensatedMoves, plainMoves } from "./moves.js";
 import { splitting } from "./splitting.js";
@@ -24,38 +23,17 @@ export function writeLoop(
   method: MethodDefinition,
   style: LoopStyle = styles.double,
 ): WrittenLoop {
-  const { accelerations, radialRate } = system;
-  const { names, coordinates, rates } = plainNames(system);
-  const states = [...coordinates, ...rates];
+  const { code, coordinates, rates, states, accelerate, radialRate } = openFrame(system);
   const n = states.length;
-  const isParameter = (symbol: string): boolean => system.symbols.includes(symbol);
-  const plain = (symbol: string): string => names.get(symbol)!;
-
-  const code = new Code();
-  code.define("h", "$step");
-  system.symbols.forEach((symbol, index) => {
-    code.define(plain(symbol), { from: "parameters", index });
-  });
-  states.forEach((state, index) => {
-    code.variable(state, { from: "io", index });
-  });
   code.variable("rate", { from: "io", index: 2 * n });
   code.variable("#taken", 0);
   code.variable("failed", 0);
-  const hoisted = hoistParameters(code, accelerations, isParameter, plain);
-  const at =
-    (bind: (state: string) => Expression) =>
-    (symbol: string): Expression =>
-      isParameter(symbol) ? plain(symbol) : bind(plain(symbol));
-  const write = (into: Code, nodes: readonly Node[], prefix: string, bind: (state: string) => Expression) =>
-    writeExpressions(into, nodes, prefix, at(bind), new Map(hoisted));
-
   const moves = style.compensated ? compensatedMoves(states) : plainMoves;
   const body = bodyOf(method, {
     coordinates,
     rates,
     velocityDependent: system.velocityDependent,
-    accelerate: (into, prefix, bind) => write(into, accelerations, prefix, bind),
+    accelerate,
     move: moves.move,
     style,
   });
@@ -78,7 +56,7 @@ export function writeLoop(
   code.when(compare("#steps", "<=", 0), (none) => finish(none, (state) => state));
   code.loop((loop) => {
     loop.append(body.step);
-    const rate = write(loop, [radialRate], "r", next)[0]!;
+    const rate = radialRate(loop, "r", next);
     loop.define("before", "rate");
     loop.set("rate", rate);
     loop.set("#taken", plus("#taken", 1));
@@ -90,22 +68,6 @@ export function writeLoop(
   // Only a step that failed comes here.
   if (body.implicit) finish(code, (state) => state);
   return { code, body };
-}
-
-/** Names of our own for everything that a definition names: a loop holds no text of a claim. */
-function plainNames({ coordinates, rates, symbols }: CompiledSystem): {
-  readonly names: ReadonlyMap<string, string>;
-  readonly coordinates: readonly string[];
-  readonly rates: readonly string[];
-} {
-  const number = (letter: string) => (name: string, i: number) => [name, `${letter}${i}`] as const;
-  const q = coordinates.map(number("x"));
-  const v = rates.map(number("v"));
-  return {
-    names: new Map([...q, ...v, ...symbols.map(number("P"))]),
-    coordinates: q.map(([, name]) => name),
-    rates: v.map(([, name]) => name),
-  };
 }
 
 function bodyOf(method: MethodDefinition, context: StepContext): StepBody {
