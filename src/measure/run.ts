@@ -1,3 +1,4 @@
+import type { DoubleDouble } from "../arithmetic/double-double.js";
 import type { RungStatus } from "../result/result.js";
 
 /** A scenario made ready to step: SI numbers only. */
@@ -8,6 +9,12 @@ export interface PreparedScenario {
   readonly parameters: readonly number[];
   /** The same with the effect switched off; null where nothing can vanish. */
   readonly nullParameters: readonly number[] | null;
+  /** The three above to 31 digits, for the reference. */
+  readonly precise: {
+    readonly state: readonly DoubleDouble[];
+    readonly parameters: readonly DoubleDouble[];
+    readonly nullParameters: readonly DoubleDouble[] | null;
+  };
   /** A start at periapsis is passage 0. */
   readonly startsAtPeriapsis: boolean;
   /** Osculating Newtonian period of the start, s; 2π in angle form. */

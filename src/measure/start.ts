@@ -2,6 +2,7 @@ import type { Scenario } from "../claim/claim.js";
 import type { StepLoop } from "../kernel/step-loop.js";
 import { radialTurn } from "./instant.js";
 import { cosineAndSine } from "./orientation.js";
+import { startOfDoubles } from "./precise-start.js";
 import type { PreparedScenario } from "./run.js";
 import { startInAngle } from "./start-in-angle.js";
 import { startInTime } from "./start-in-time.js";
@@ -63,7 +64,8 @@ export function prepareScenario(
     radialTurn(fineLoop(), prepared.state, parameters, instant) > 0;
   const startsAtPeriapsis =
     atApsis && turnsOutward(prepared.parameters) && turnsOutward(nullParameters ?? prepared.parameters);
-  return { ...prepared, nullParameters, startsAtPeriapsis, span };
+  const precise = startOfDoubles({ ...prepared, nullParameters });
+  return { ...prepared, nullParameters, precise, startsAtPeriapsis, span };
 }
 
 function spanOf({ equations, span }: Scenario): PreparedScenario["span"] | StartProblem {

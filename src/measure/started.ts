@@ -15,7 +15,8 @@ export interface SystemShape {
 }
 
 /** All of a prepared scenario that the start settles. */
-export interface Started extends Omit<PreparedScenario, "nullParameters" | "span" | "startsAtPeriapsis"> {
+export interface Started
+  extends Omit<PreparedScenario, "nullParameters" | "precise" | "span" | "startsAtPeriapsis"> {
   /** The radius is stationary; whether it is smallest is for the equations to say. */
   readonly atApsis: boolean;
   /** A small part of the time, or angle, in which the motion changes. */

@@ -7,6 +7,7 @@ import { findEquations } from "../../src/equations/catalog/index.js";
 import { compileStepLoop, stepLoopInC } from "../../src/kernel/compile.js";
 import { compilePairLoop } from "../../src/kernel/pair-loop.js";
 import { runPassages } from "../../src/measure/passages.js";
+import { startOfDoubles } from "../../src/measure/precise-start.js";
 import { findMethod } from "../../src/methods/catalog/index.js";
 import { compileC, hasGcc, runC } from "../kernel/gcc.js";
 import { type Start, startOf } from "../kernel/starts.js";
@@ -149,6 +150,7 @@ function ladder(gcc: boolean): void {
     state,
     parameters,
     nullParameters: null,
+    precise: startOfDoubles({ state: [], parameters, nullParameters: null }),
     startsAtPeriapsis: true,
     period,
     semiMajorAxis: 5.8e10,

@@ -1,3 +1,4 @@
+import { startOfDoubles } from "../../src/measure/precise-start.js";
 import type { PreparedScenario } from "../../src/measure/run.js";
 
 export const ARCSEC = Math.PI / 180 / 3600;
@@ -13,10 +14,14 @@ export function planarOrbit(
   added: readonly number[] = [],
   nullParameters: readonly number[] | null = null,
 ): PreparedScenario {
-  return {
+  const doubles = {
     state: [a * (1 - e), 0, 0, Math.sqrt(((GM / a) * (1 + e)) / (1 - e))],
     parameters: [GM, ...added],
     nullParameters,
+  };
+  return {
+    ...doubles,
+    precise: startOfDoubles(doubles),
     startsAtPeriapsis: true,
     period: 2 * Math.PI * Math.sqrt(a ** 3 / GM),
     semiMajorAxis: a,

@@ -8,6 +8,7 @@ import { conservedObservables } from "../../src/kernel/observables.js";
 import { compileSystem } from "../../src/kernel/system.js";
 import { apsidalAdvance } from "../../src/measure/advance.js";
 import { runPassages } from "../../src/measure/passages.js";
+import { startOfDoubles } from "../../src/measure/precise-start.js";
 import { findMethod } from "../../src/methods/catalog/index.js";
 
 /*
@@ -104,6 +105,7 @@ describe.each([0, 0.1, 0.25])("mass ratio %d", (nu) => {
           state: STATE,
           parameters,
           nullParameters: null,
+          precise: startOfDoubles({ state: STATE, parameters, nullParameters: null }),
           startsAtPeriapsis: true,
           period: PERIOD,
           semiMajorAxis: A,

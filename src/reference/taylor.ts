@@ -1,0 +1,124 @@
+import {
+  add,
+  type DoubleDouble,
+  divide,
+  fromDouble,
+  multiply,
+  shift,
+  toDouble,
+} from "../arithmetic/double-double.js";
+import type { CompiledSystem } from "../kernel/system.js";
+import { radialMotion, scales } from "./rates.js";
+import { SeriesTable } from "./series.js";
+import type { PreciseState, Stepper, StepperOptions } from "./stepper.js";
+import { type TaylorProgram, taylorProgram } from "./taylor-program.js";
+
+/** Order of the series for a tolerance: half its natural logarithm and one more (Jorba and Zou, 3.3.2), a few over. */
+const orderFor = (tolerance: number): number => Math.ceil(-Math.log(tolerance) / 2) + 3;
+const SAFETY = 0.9;
+/** Products of coefficients that take as long as one evaluation of the right-hand side in double-double. */
+const PRODUCTS_AN_EVALUATION = 30;
+
+const powerOfTwoNear = (value: number): number => 2 ** Math.round(Math.log2(value));
+
+const programs = new WeakMap<CompiledSystem, TaylorProgram>();
+function programOf(system: CompiledSystem): TaylorProgram {
+  let known = programs.get(system);
+  if (known === undefined) {
+    known = taylorProgram(system);
+    programs.set(system, known);
+  }
+  return known;
+}
+
+/**
+ * Taylor series of the solution, its coefficients by recurrence from the expression graph; each step as long as
+ * the last two terms allow (A. Jorba and M. Zou, Experimental Mathematics 14 (2005) 99).
+ */
+export function taylorStepper(system: CompiledSystem, options: StepperOptions): Stepper {
+  const { parameters, tolerance } = options;
+  const program = programOf(system);
+  const order = orderFor(tolerance);
+  const table = new SeriesTable(program.slots, order);
+  const n = system.states.length;
+  const half = n / 2;
+  const motion = radialMotion(system, parameters);
+  const perStep = (program.recurrences.length * order * order) / 2 / PRODUCTS_AN_EVALUATION;
+  for (const [slot, value] of program.constants(parameters)) table.set(slot, 0, value);
+  let before = options.state;
+  let state = options.state;
+  let rate = toDouble(motion.rate(state));
+  let rateBefore = rate;
+  let evaluations = 0;
+  /** Unit of time of the series, near the length of a step: coefficients neither over- nor underflow. */
+  let unit = 1;
+  let last = options.firstStep;
+
+  const expand = (from: PreciseState): void => {
+    unit = powerOfTwoNear(last);
+    from.forEach((value, i) => {
+      table.set(program.states[i]!, 0, value);
+    });
+    for (let k = 0; k < order; k++) {
+      for (const next of program.recurrences) next(table, k);
+      // In units of `unit`, a power of two: x_(k+1) = unit v_k / (k + 1).
+      const over = fromDouble((k + 1) / unit);
+      for (let i = 0; i < half; i++) {
+        const [q, v] = [program.states[i]!, program.states[half + i]!];
+        table.set(q, k + 1, divide(table.get(v, k), over));
+        table.set(v, k + 1, divide(table.get(program.accelerations[i]!, k), over));
+      }
+    }
+    evaluations += perStep;
+  };
+  const sizeOf = (k: number, first: number, last: number): number => {
+    let square = 0;
+    for (let i = first; i < last; i++) square += table.size(program.states[i]!, k) ** 2;
+    return Math.sqrt(square);
+  };
+  const at = (length: DoubleDouble): PreciseState => {
+    const part = shift(length, 1 / unit);
+    return program.states.map((slot) => {
+      let sum = table.get(slot, order);
+      for (let k = order - 1; k >= 0; k--) sum = add(multiply(sum, part), table.get(slot, k));
+      return sum;
+    });
+  };
+
+  return {
+    name: `Taylor series of order ${order}`,
+    get before() {
+      return before;
+    },
+    get state() {
+      return state;
+    },
+    get rateBefore() {
+      return rateBefore;
+    },
+    get rate() {
+      return rate;
+    },
+    get evaluations() {
+      return evaluations;
+    },
+    within: at,
+    step() {
+      expand(state);
+      const [position, velocity] = scales(system, state);
+      let most = Number.POSITIVE_INFINITY;
+      for (const k of [order - 1, order]) {
+        const term = Math.max(sizeOf(k, 0, half) / position, sizeOf(k, half, n) / velocity);
+        most = Math.min(most, (tolerance / term) ** (1 / k));
+      }
+      const length: DoubleDouble = { high: SAFETY * most * unit, low: 0 };
+      if (!(Number.isFinite(length.high) && length.high > 0)) return null;
+      last = length.high;
+      before = state;
+      state = at(length);
+      rateBefore = rate;
+      rate = toDouble(motion.rate(state));
+      return length;
+    },
+  };
+}
