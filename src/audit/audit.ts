@@ -1,7 +1,7 @@
 import type { Claim } from "../claim/claim.js";
-import type { BestValue } from "../convergence/best.js";
 import type { ClaimResult, PassageSeries } from "../result/result.js";
 import { judge } from "../verdict/judge.js";
+import { bestOf, referenceOf } from "./best.js";
 import { evidenceOf } from "./evidence.js";
 import type { ExecuteOptions } from "./execute.js";
 import { type Investigation, investigate } from "./investigate.js";
@@ -44,7 +44,7 @@ async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions):
   const ledger = ledgerOf(investigation.extras);
   const crossReading = crossReadingOf(investigation, prepared, claim);
   const judgement = judge(evidenceOf(claim, prepared, investigation, ladders, ledger, crossReading));
-  const { best } = investigation;
+  const best = bestOf(investigation);
   return {
     file: claim.file,
     title: claim.title,
@@ -54,9 +54,10 @@ async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions):
     best: {
       value: best?.value ?? null,
       halfWidth: best?.halfWidth ?? null,
-      from: best === null ? null : "extrapolation",
-      says: bestInWords(best, unit.text),
+      from: best?.from ?? null,
+      says: bestInWords(investigation, unit.text),
     },
+    reference: referenceOf(investigation, unit.text),
     ladders,
     ledger,
     setup: setupOf(claim, prepared),
@@ -76,7 +77,11 @@ function crossReadingOf(
   return { value: reading.perOrbit * size, halfWidth: reading.halfWidth * size };
 }
 
-function bestInWords(best: BestValue | null, unit: string): string {
+function bestInWords({ extrapolated: best, reference }: Investigation, unit: string): string {
+  if ("value" in reference) {
+    const [carrier, other] = reference.methods;
+    return `${carrier} in double-double; ${other} agrees to ${reference.apart.toPrecision(2)} ${unit}.`;
+  }
   if (best === null) return "No witness's ladder bounds the figure.";
   if (best.second === null) return `The limit of ${best.carrier}'s ladder alone, with no second witness.`;
   const apart = `${best.apart!.toPrecision(2)} ${unit}`;

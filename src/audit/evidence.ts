@@ -2,6 +2,7 @@ import type { Claim } from "../claim/claim.js";
 import { nominalLength } from "../measure/limits.js";
 import type { Ladder, LedgerEntry } from "../result/result.js";
 import type { Evidence, SolutionEvidence } from "../verdict/evidence.js";
+import { bestOf } from "./best.js";
 import type { Investigation } from "./investigate.js";
 import type { Prepared } from "./prepare.js";
 import { readingOff } from "./readings.js";
@@ -16,7 +17,7 @@ export function evidenceOf(
   crossReading: SolutionEvidence["crossReading"],
 ): Evidence {
   const { claimed } = claim;
-  const { best } = investigation;
+  const best = bestOf(investigation);
   return {
     claimed: {
       value: claimed.value,
@@ -37,7 +38,7 @@ export function evidenceOf(
 
 function solutionEvidence(
   claim: Claim,
-  { plan, solution, ladders, best }: Investigation,
+  { plan, solution, ladders, extrapolated }: Investigation,
   ladder: Ladder,
   crossReading: SolutionEvidence["crossReading"],
 ): SolutionEvidence | null {
@@ -46,7 +47,7 @@ function solutionEvidence(
   const { on, off } = solution.runs.rungs[plan.authors]!;
   const { value, null: base, figure, stepsPerOrbit } = ladder.rungs[plan.authors]!;
   const { unit, baseline } = claim.claimed;
-  const carrier = ladders.find(({ runs }) => runs.method.name === best?.carrier)?.runs.rungs.at(-1);
+  const carrier = ladders.find(({ runs }) => runs.method.name === extrapolated?.carrier)?.runs.rungs.at(-1);
   const ofRun = readingOff(on, carrier?.on ?? null, unit);
   const ofNull = baseline === "subtracted" ? readingOff(off, carrier?.off ?? null, unit) : 0;
   return {

@@ -9,6 +9,7 @@ import { type AnalysedLadder, analyse } from "./ladders.js";
 import { type LadderPlan, planLadder, rungsWorthRunning } from "./plan.js";
 import type { JobPool } from "./pool.js";
 import type { Prepared } from "./prepare.js";
+import { findReference, type NoReference, type Reference } from "./reference.js";
 import { costPerStep, planTasks } from "./tasks.js";
 
 /** Everything that was run for a claim, analysed; figures in the claim's unit. */
@@ -19,7 +20,9 @@ export interface Investigation {
   readonly solution: AnalysedLadder | null;
   readonly extras: Extras | null;
   readonly estimates: readonly MethodEstimate[];
-  readonly best: BestValue | null;
+  /** By extrapolation of the witnesses' ladders. */
+  readonly extrapolated: BestValue | null;
+  readonly reference: Reference | NoReference;
 }
 
 /** Methods of this order or less are among the witnesses for the eye. */
@@ -73,7 +76,10 @@ export async function investigate(
       halvedLedger: authorsCost < AFFORDABLE / 4,
     }),
   );
-  const outcomes = await execute(pool, recipe, scenario, tasks, options);
+  const [outcomes, reference] = await Promise.all([
+    execute(pool, recipe, scenario, tasks, options),
+    findReference(claim.claimed, prepared, pool, options.signal),
+  ]);
   const gathered = methods.map((method) =>
     gather(
       method,
@@ -97,6 +103,7 @@ export async function investigate(
     solution: authors === null ? null : ladders[0]!,
     extras: authors === null ? null : gathered[0]!.extras,
     estimates,
-    best: chooseBest(estimates),
+    extrapolated: chooseBest(estimates),
+    reference,
   };
 }

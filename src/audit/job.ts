@@ -2,6 +2,7 @@ import type { EquationsDefinition } from "../equations/definition.js";
 import type { LedgerReading } from "../measure/ledger.js";
 import type { PreparedScenario } from "../measure/run.js";
 import type { MethodDefinition } from "../methods/definition.js";
+import type { PreciseOrbit, ReferenceMethod } from "../reference/orbit.js";
 import type { RungStatus } from "../result/result.js";
 
 /** All that a worker needs to build the step loop of a job. */
@@ -10,6 +11,18 @@ export interface SystemRecipe {
   /** Parameters that stay symbols; the rest are folded into the loop at their defaults. */
   readonly parameters: readonly string[];
   readonly planar: boolean;
+}
+
+/** A scenario followed in double-double by one of the reference's methods. */
+export interface ReferenceJob {
+  readonly system: SystemRecipe;
+  readonly scenario: PreparedScenario;
+  readonly method: ReferenceMethod;
+  readonly effect: "on" | "off";
+  /** Of a step, as a part of position and velocity. */
+  readonly tolerance: number;
+  /** Most evaluations. */
+  readonly evaluations: number;
 }
 
 /** Work on one method, done by one worker in one go. */
@@ -57,3 +70,6 @@ export type Outcome =
   | { readonly kind: "early"; readonly state: readonly number[] | null }
   | { readonly kind: "ledger"; readonly entries: readonly LedgerReading[] | null }
   | { readonly kind: "second-reading"; readonly perOrbit: number | null; readonly halfWidth: number | null };
+
+/** What a job gives. */
+export type Done<J> = J extends ReferenceJob ? PreciseOrbit : Outcome[];

@@ -1,10 +1,10 @@
 import { existsSync } from "node:fs";
 import { fileURLToPath } from "node:url";
-import type { Job, Outcome } from "./job.js";
+import type { Done, Job, ReferenceJob } from "./job.js";
 
 /** Where jobs are done. */
 export interface JobPool {
-  run(job: Job, signal?: AbortSignal): Promise<Outcome[]>;
+  run<J extends Job | ReferenceJob>(job: J, signal?: AbortSignal): Promise<Done<J>>;
   close(): Promise<void>;
 }
 

@@ -10,7 +10,8 @@ import { runLimits } from "../measure/limits.js";
 import { runPassages } from "../measure/passages.js";
 import type { PreparedScenario, Run } from "../measure/run.js";
 import type { MethodDefinition } from "../methods/definition.js";
-import type { Job, Outcome, Reading, SystemRecipe, Task } from "./job.js";
+import { type PreciseOrbit, preciseOrbit } from "../reference/orbit.js";
+import type { Done, Job, Outcome, Reading, ReferenceJob, SystemRecipe, Task } from "./job.js";
 
 interface Built {
   readonly system: CompiledSystem;
@@ -45,9 +46,17 @@ export function loopOf(recipe: SystemRecipe, method: MethodDefinition): StepLoop
 }
 
 /** Does the tasks of a job in order. Pure but for the time it takes: the same job gives the same figures. */
-export default function runJob(job: Job): Outcome[] {
+export default function runJob<J extends Job | ReferenceJob>(job: J): Done<J>;
+export default function runJob(job: Job | ReferenceJob): Outcome[] | PreciseOrbit {
+  if ("effect" in job) return follow(job);
   const loop = loopOf(job.system, job.method);
   return job.tasks.map((task) => runTask(job, loop, task));
+}
+
+function follow({ system, scenario, method, effect, tolerance, evaluations }: ReferenceJob): PreciseOrbit {
+  const { parameters, nullParameters } = scenario.precise;
+  const values = effect === "on" ? parameters : (nullParameters ?? parameters);
+  return preciseOrbit(method, systemOf(system).system, scenario, values, tolerance, evaluations);
 }
 
 function runTask(job: Job, loop: StepLoop, task: Task): Outcome {

@@ -23,6 +23,7 @@ export function undetermined(
     asSolved: { value: null, null: null, error: null, halfWidth: null },
     crossReading: null,
     best: { value: null, halfWidth: null, from: null, says: "Nothing was run." },
+    reference: null,
     checks: [
       { name: "reproduces", outcome: "not-checked", figure: null, limit: null, unit: "", says: reason },
     ],

@@ -16,7 +16,7 @@ export interface PreciseFunction {
   readonly ioLength: number;
   /**
    * @param io the high parts, then the low ones; read at the call, written at the return
-   * @param parameters in the order of the system
+   * @param parameters in the order of the system, none of them infinite
    */
   run(io: Float64Array, parameters: readonly DoubleDouble[], step: DoubleDouble, steps: number): number;
 }
@@ -42,6 +42,11 @@ function mathematics(): Mathematics {
  */
 const FAR = 2 ** 300;
 
+export const withoutInfinities = (values: readonly DoubleDouble[]): DoubleDouble[] =>
+  values.map((value) =>
+    Number.isFinite(value.high) ? value : { high: Math.sign(value.high) * FAR, low: 0 },
+  );
+
 /** @param parameters how many there are */
 export function compilePrecise(code: Code, ioLength: number, parameters: number): PreciseFunction {
   const lengths = { io: ioLength, parameters };
@@ -53,7 +58,7 @@ export function compilePrecise(code: Code, ioLength: number, parameters: number)
     run(io, values, step, steps) {
       for (let i = 0; i < 2 * ioLength; i++) memory[i] = io[i]!;
       values.forEach(({ high, low }, i) => {
-        memory[parametersAt + i] = Number.isFinite(high) ? high : Math.sign(high) * FAR;
+        memory[parametersAt + i] = high;
         memory[parametersAt + parameters + i] = low;
       });
       memory[parametersAt + 2 * parameters] = step.low;

@@ -10,6 +10,7 @@ import {
   ZERO,
 } from "../arithmetic/double-double.js";
 import { lessTurns } from "../arithmetic/elementary.js";
+import { withoutInfinities } from "../kernel/precise-loop.js";
 import type { CompiledSystem } from "../kernel/system.js";
 import { ahead, senseOf, TURN } from "../measure/apsidal-angle.js";
 import type { PreparedScenario } from "../measure/run.js";
@@ -56,10 +57,11 @@ export function preciseOrbit(
   method: ReferenceMethod,
   system: CompiledSystem,
   scenario: PreparedScenario,
-  parameters: readonly DoubleDouble[],
+  given: readonly DoubleDouble[],
   tolerance: number,
   most: number,
 ): PreciseOrbit {
+  const parameters = withoutInfinities(given);
   const stepper = steppers[method](system, {
     state: scenario.precise.state,
     parameters,

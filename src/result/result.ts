@@ -84,6 +84,20 @@ export interface ClaimResult {
     /** In words: which methods carry it and how far they agree. */
     readonly says: string;
   };
+  /**
+   * The scenario solved in double-double arithmetic by two independent methods; null in a result without an
+   * audit. Without a reference its figures are null and `says` tells why.
+   */
+  readonly reference: {
+    readonly value: number | null;
+    readonly halfWidth: number | null;
+    /** Distance of the two methods' figures. */
+    readonly apart: number | null;
+    /** The first carries the value. */
+    readonly methods: readonly string[];
+    readonly evaluations: number | null;
+    readonly says: string;
+  } | null;
   readonly checks: readonly Check[];
   readonly budget: Budget | null;
   readonly ladders: readonly Ladder[];

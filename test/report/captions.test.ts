@@ -108,6 +108,7 @@ describe("the caption of the intervals", () => {
     const at = (reproduces: Outcome, carries: Outcome): string =>
       intervalsCaption({
         ...result,
+        reference: null,
         checks: [check("reproduces", reproduces), check("carries-digits", carries)],
       });
     expect(at("pass", "pass")).toContain("falls on both");

@@ -73,6 +73,7 @@ const solved: ClaimResult = {
   asSolved: { value: BEST + OFF, null: OFF, error: OFF, halfWidth: 2.2e-6 },
   crossReading: { value: 62.01, halfWidth: 4.8 },
   best: { value: BEST, halfWidth: 9.3e-7, from: "extrapolation", says: "The limit of a witness." },
+  reference: null,
   checks: NAMES.map((name, k) => ({
     name,
     outcome: OUTCOMES[k % 4]!,
