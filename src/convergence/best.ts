@@ -1,4 +1,4 @@
-import type { Estimate } from "./extrapolation.js";
+import type { Estimate } from "./estimators/estimator.js";
 
 /** A method's own limit of its ladder. */
 export interface MethodEstimate extends Estimate {

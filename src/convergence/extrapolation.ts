@@ -1,98 +1,106 @@
-import type { Difference, LadderPoint } from "./differences.js";
-import type { Window } from "./window.js";
-
-/** A value with its 95 % half-width. */
-export interface Estimate {
-  readonly value: number;
-  readonly halfWidth: number;
-}
+import { type LadderPoint, successiveDifferences } from "./differences.js";
+import type { Estimate } from "./estimators/estimator.js";
+import { NEAR_WHOLE, nextColumn } from "./extrapolants.js";
+import { remainderOfTwoPowers } from "./two-powers.js";
+import { findWindow, type Window } from "./window.js";
 
 /**
  * Safety factors of the grid convergence index: Roache, Verification and Validation in Computational
  * Science and Engineering (1998); Celik et al., J. Fluids Eng. 130, 078001 (2008).
  */
-const SAFETY_IN_WINDOW = 1.25;
-const SAFETY_OUTSIDE = 3;
-/** The part of a Richardson correction that is never claimed to be known, however well extrapolants agree. */
-const CORRECTION_SHARE = 0.1;
+export const SAFETY_IN_WINDOW = 1.25;
+export const SAFETY_OUTSIDE = 3;
 
 /**
- * Richardson extrapolation with the measured exponent p: Q* = Q_fine - (Q_coarse - Q_fine) / (2^p - 1).
+ * From the 95 % half-width of rounding, measured on eight runs, to the 99 % that a limit is held to: Student's
+ * t of seven degrees of freedom, 3.499 / 2.365 (M. Abramowitz and I. Stegun, table 26.10).
+ */
+const TO_99_PERCENT = 1.48;
+
+/**
+ * The limit of a ladder that has a window.
+ *
+ * Richardson's extrapolants T = Q_fine - (Q_coarse - Q_fine) / (2^p - 1) of the leading power p make a ladder of
+ * their own, and so on (L. F. Richardson and J. A. Gaunt, Phil. Trans. R. Soc. A 226, 299 (1927)). A column of
+ * them counts where its own convergence is seen: where it has a window of a higher power. Its next correction
+ * is then its error, and is not applied: an extrapolant that is not seen to converge may be a thousand times
+ * better than the rung it comes from or no better at all, and the ladder does not tell which.
  *
  * Half-widths add truncation and rounding in line and not in quadrature: truncation is a bias, and the
  * choice of the tightest candidate spends what quadrature would save.
  */
 export function extrapolateWindow(points: readonly LadderPoint[], window: Window): Estimate {
-  const growth = 2 ** window.exponent - 1;
-  const candidates: Estimate[] = [];
-  let previous: number | null = null;
-  let coarser = 0;
-  let correction = 0;
-  for (const difference of window.differences) {
-    const fine = points[difference.rung + 1]!;
-    correction = difference.value / growth;
-    const value = fine.value! - correction;
-    if (previous !== null) {
-      // The exponent of the last two differences alone stands for where the measured one is heading.
-      const local = Math.log2(coarser / difference.value);
-      // The last extrapolant's distance from the one before is the error of the one before.
-      const unresolved =
-        SAFETY_OUTSIDE * Math.abs(value - previous) +
-        SAFETY_IN_WINDOW * Math.abs(correction - difference.value / (2 ** local - 1)) +
-        CORRECTION_SHARE * Math.abs(correction);
-      const truncation = Math.min(SAFETY_IN_WINDOW * Math.abs(correction), unresolved);
-      candidates.push({ value, halfWidth: truncation + Math.hypot(fine.floor, difference.noise / growth) });
-    }
-    previous = value;
-    coarser = difference.value;
-  }
-  // Beyond the window the law carries on below the rounding floor; the figure stands as it is. What a
-  // difference there is off the law shows rounding at work, whatever the floor says.
-  let surprise = 0;
-  for (let k = window.rungs[1] + 1; k < points.length; k++) {
-    const { value, floor } = points[k]!;
-    const step = points[k - 1]!.value! - value!;
-    correction /= 2 ** window.exponent;
-    surprise = Math.max(surprise, Math.abs(step - correction * growth));
-    candidates.push({
-      value: value!,
-      halfWidth: SAFETY_IN_WINDOW * Math.abs(correction) + Math.hypot(floor, surprise),
-    });
-  }
-  return tightest(candidates);
+  return tightest(candidates(points, window, SAFETY_IN_WINDOW));
+}
+
+function candidates(points: readonly LadderPoint[], window: Window, safety: number): Estimate[] {
+  const inside = insideWindow(points, window, safety);
+  const found = [...inside.estimates, ...beyondWindow(points, window, inside.truncation)];
+  const column = nextColumn(points, window);
+  if (column === null) return found;
+  const next = findWindow(successiveDifferences(column.points));
+  if (next === null || !isSettled(next, column.power)) return found;
+  return [...found, ...candidates(column.points, next, SAFETY_OUTSIDE)];
 }
 
 /**
- * The limit where rounding is reached before a window shows: among the finest differences that are all
- * rounding, the coarsest rung has collected the least of it. Its own truncation is at most the difference
- * to the next, widened by the factor for an unknown order.
+ * Extrapolants rest on an expansion in whole powers of the step. Their exponent is that of a later power: whole,
+ * and higher. Of passages it often is neither, since the partial step at a passage is another one on every rung
+ * and its error, of order p + 1, does not follow the law; hence too the larger safety factor.
  */
-export function extrapolateFlat(
+function isSettled({ exponent }: Window, power: number): boolean {
+  const whole = Math.round(exponent);
+  return whole > power && Math.abs(exponent - whole) <= NEAR_WHOLE;
+}
+
+/**
+ * The figures of the window's rungs, with the larger of two remainders: of one power at the lower end of the
+ * exponent's interval, and of two powers. No order is below one, unless it is measured to be.
+ */
+function insideWindow(
   points: readonly LadderPoint[],
-  differences: readonly Difference[],
-): Estimate {
-  const flat = flatDifferences(differences);
-  return tightest(
-    flat.map((d) => ({
-      value: points[d.rung + 1]!.value!,
-      halfWidth: SAFETY_OUTSIDE * Math.abs(d.value) + points[d.rung + 1]!.floor,
-    })),
-  );
+  window: Window,
+  safety: number,
+): { readonly estimates: Estimate[]; readonly truncation: number } {
+  const { differences } = window;
+  const estimates: Estimate[] = [];
+  let truncation = 0;
+  for (let k = 2; k < differences.length; k++) {
+    const [a, b, c] = [differences[k - 2]!.value, differences[k - 1]!.value, differences[k]!.value];
+    const onePower = Math.abs(c) / (2 ** lowestExponent(window, Math.log2(b / c)) - 1);
+    truncation = safety * Math.max(onePower, Math.abs(remainderOfTwoPowers(a, b, c)));
+    const { value, floor } = points[differences[k]!.rung + 1]!;
+    estimates.push({ value: value!, halfWidth: truncation + TO_99_PERCENT * floor });
+  }
+  return { estimates, truncation };
 }
 
-/** The differences at the fine end that are all rounding. */
-export function flatDifferences(differences: readonly Difference[]): Difference[] {
-  const lastClear = differences.findLastIndex((d) => d.clear);
-  return differences.slice(lastClear + 1);
+const lowestExponent = ({ interval }: Window, local: number): number =>
+  Math.min(Math.max(1, interval[0]), local);
+
+/**
+ * Beyond the window the law carries on below the rounding floor; the figure stands as it is. What a
+ * difference there is off the law shows rounding at work, whatever the floor says.
+ *
+ * @param truncation of the window's last rung
+ */
+function beyondWindow(points: readonly LadderPoint[], window: Window, truncation: number): Estimate[] {
+  const [before, last] = window.differences.slice(-2);
+  const lowest = lowestExponent(window, Math.log2(before!.value / last!.value));
+  const estimates: Estimate[] = [];
+  let expected = last!.value;
+  let remainder = truncation;
+  let surprise = 0;
+  for (let k = window.rungs[1] + 1; k < points.length; k++) {
+    const { value, floor } = points[k]!;
+    expected /= 2 ** window.exponent;
+    remainder /= 2 ** lowest;
+    surprise = Math.max(surprise, Math.abs(points[k - 1]!.value! - value! - expected));
+    estimates.push({ value: value!, halfWidth: remainder + Math.hypot(TO_99_PERCENT * floor, surprise) });
+  }
+  return estimates;
 }
 
-/** Without one exponent: the finest figure, give or take three times the larger of the last two differences. */
-export function boundIrregular(points: readonly LadderPoint[], differences: readonly Difference[]): Estimate {
-  const finest = points.at(-1)!;
-  const spread = Math.max(...differences.slice(-2).map((d) => Math.abs(d.value)));
-  return { value: finest.value!, halfWidth: SAFETY_OUTSIDE * spread + finest.floor };
-}
-
-function tightest(estimates: readonly Estimate[]): Estimate {
+export function tightest(estimates: readonly Estimate[]): Estimate {
   return estimates.reduce((best, next) => (next.halfWidth < best.halfWidth ? next : best));
 }

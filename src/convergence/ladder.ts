@@ -1,12 +1,8 @@
 import type { LadderShape } from "../result/result.js";
+import { boundFlat, boundIrregular, flatDifferences } from "./bounds.js";
 import { type Difference, type LadderPoint, successiveDifferences } from "./differences.js";
-import {
-  boundIrregular,
-  type Estimate,
-  extrapolateFlat,
-  extrapolateWindow,
-  flatDifferences,
-} from "./extrapolation.js";
+import type { Estimate } from "./estimators/estimator.js";
+import { extrapolateWindow } from "./extrapolation.js";
 import { ladderShape } from "./shape.js";
 import { findWindow } from "./window.js";
 
@@ -65,7 +61,7 @@ export function analyseLadder(rungs: readonly LadderPoint[]): LadderAnalysis {
       return {
         ...unknown,
         window: [firstSinking(differences), points.length - 1],
-        limit: extrapolateFlat(points, differences),
+        limit: boundFlat(points, differences),
       };
     }
     case "oscillating":

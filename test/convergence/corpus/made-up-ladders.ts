@@ -1,4 +1,5 @@
 import type { LadderPoint } from "../../../src/convergence/differences.js";
+import { ENSEMBLE_SIZE, roundingHalfWidth } from "../../../src/convergence/rounding.js";
 import { type Case, cutShort } from "./case.js";
 
 /** A linear congruential generator (W. H. Press et al., Numerical Recipes (1992), §7.1, ranqd1): uniform in [0, 1). */
@@ -30,6 +31,19 @@ interface Shape {
   make(random: Random): { readonly terms: Terms; readonly order: number; readonly symmetric: boolean };
 }
 
+/** Two terms of which the lower order takes over somewhere on the ladder; of opposite signs, through nought. */
+function crossing(random: Random, sign: 1 | -1) {
+  const order = whole(random, 1, 6);
+  const gap = whole(random, 1, 4);
+  const high = coefficient(random);
+  const low = sign * high * 2 ** (-gap * between(random, 2, 7));
+  const terms: Terms = [
+    [order, low],
+    [order + gap, high],
+  ];
+  return { order, symmetric: false, terms };
+}
+
 const shapes: readonly Shape[] = [
   {
     kind: "all powers",
@@ -52,33 +66,27 @@ const shapes: readonly Shape[] = [
       return { order, symmetric: false, terms: series(random, order + 1, 1, 10 ** between(random, -1, 1)) };
     },
   },
-  {
-    // The lower order takes over somewhere on the ladder.
-    kind: "change of order",
-    make: (random) => {
-      const order = whole(random, 1, 6);
-      const higher = order + whole(random, 1, 4);
-      const crossing = between(random, 2, 7);
-      const high = coefficient(random);
-      const low = Math.sign(coefficient(random)) * Math.abs(high) * 2 ** (-(higher - order) * crossing);
-      return {
-        order,
-        symmetric: false,
-        terms: [
-          [order, low],
-          [higher, high],
-        ],
-      };
-    },
-  },
+  { kind: "change of order", make: (random) => crossing(random, 1) },
+  { kind: "change of sign", make: (random) => crossing(random, -1) },
 ];
 
-/** A floor that is what a small ensemble would have measured: right within a factor of about two. */
+/** Standard normal (G. E. P. Box and M. E. Muller, Ann. Math. Stat. 29, 610 (1958)). */
+const normal = (random: Random): number =>
+  Math.sqrt(-2 * Math.log(1 - random())) * Math.cos(2 * Math.PI * random());
+
+/** Rung of the ensemble that the floor is measured on. */
+const ENSEMBLE_RUNG = 4;
+
+/** Rounding that walks at random as the steps get finer, and its floor as an ensemble would measure it. */
 function withRounding(random: Random, count: number, figure: (k: number) => number): LadderPoint[] {
   const sigma = 10 ** between(random, -15, -8);
-  const measured = 1.96 * sigma * 2 ** between(random, -0.5, 1);
-  const gauss = (): number => Math.sqrt(-2 * Math.log(1 - random())) * Math.cos(2 * Math.PI * random());
-  return Array.from({ length: count }, (_, k) => ({ value: figure(k) + sigma * gauss(), floor: measured }));
+  const ensemble = Array.from({ length: ENSEMBLE_SIZE }, () => sigma * normal(random));
+  const floor = roundingHalfWidth(ensemble)!;
+  const growth = (k: number): number => Math.max(1, 2 ** ((k - ENSEMBLE_RUNG) / 2));
+  return Array.from({ length: count }, (_, k) => ({
+    value: figure(k) + sigma * growth(k) * normal(random),
+    floor: floor * growth(k),
+  }));
 }
 
 /** Made-up ladders with rounding noise, as many of each shape as asked for. */
@@ -104,19 +112,22 @@ function pick(random: Random, whole: Case): Case {
 }
 
 /**
- * The difference of two runs whose common error all but cancels: what is left is scattered, since the phase
- * of the partial step at a passage is another one on every rung.
+ * The difference of two runs whose errors of order p all but cancel. The phase of the partial step at a
+ * passage is another one on every rung and in either run, so that what is left is scattered.
  */
 function scattered(random: Random, i: number): Case {
   const order = whole(random, 1, 6);
   const truth = between(random, -1, 1);
-  const [size, share] = [coefficient(random), 10 ** between(random, -3, -0.3)];
-  const points = withRounding(
-    random,
-    9,
-    (k) =>
-      truth + size * 2 ** (-order * k) * (1 + share * (2 * random() - 1)) - share * size * 2 ** (-order * k),
-  );
-  const traits = { order, symmetric: false };
-  return { label: `phase scatter ${i}`, kind: "phase scatter", points, truth, traits };
+  const [left, scatter] = [coefficient(random), coefficient(random)];
+  const points = withRounding(random, 9, (k) => {
+    const phases = random() - random();
+    return truth + 2 ** (-order * k) * (left + scatter * phases);
+  });
+  return {
+    label: `phase scatter ${i}`,
+    kind: "phase scatter",
+    points,
+    truth,
+    traits: { order, symmetric: false },
+  };
 }
