@@ -1,3 +1,4 @@
+import type { LoopArithmetic } from "../kernel/arithmetic.js";
 import type { PreparedScenario } from "../measure/run.js";
 import type { MethodDefinition } from "../methods/definition.js";
 import type { Outcome, SystemRecipe } from "./job.js";
@@ -33,9 +34,9 @@ export async function execute(
   let done = 0;
   onProgress?.(0);
   await Promise.all(
-    bundle(tasks, total * LARGEST_JOB).map(async ({ method, indices, cost }) => {
+    bundle(tasks, total * LARGEST_JOB).map(async ({ method, arithmetic, indices, cost }) => {
       const results = await pool.run(
-        { system, method, scenario, tasks: indices.map((i) => tasks[i]!.task) },
+        { system, method, arithmetic, scenario, tasks: indices.map((i) => tasks[i]!.task) },
         signal,
       );
       results.forEach((outcome, k) => {
@@ -50,21 +51,24 @@ export async function execute(
 
 interface Bundle {
   readonly method: MethodDefinition;
+  readonly arithmetic: LoopArithmetic;
   readonly indices: number[];
   cost: number;
 }
 
-/** Tasks of one method together, cheap ones first in each so that the loop is warm for the dear ones. */
+/** Tasks of one loop together, cheap ones first in each so that the loop is warm for the dear ones. */
 function bundle(tasks: readonly PlannedTask[], largest: number): Bundle[] {
   const bundles: Bundle[] = [];
-  const open = new Map<string, Bundle>();
+  const open = new Map<MethodDefinition, Map<LoopArithmetic, Bundle>>();
   const byCost = tasks.map((_, i) => i).sort((a, b) => tasks[a]!.cost - tasks[b]!.cost || a - b);
   for (const i of byCost) {
-    const { method, cost } = tasks[i]!;
-    let into = open.get(method.name);
+    const { method, arithmetic, cost } = tasks[i]!;
+    const ofMethod = open.get(method) ?? new Map<LoopArithmetic, Bundle>();
+    open.set(method, ofMethod);
+    let into = ofMethod.get(arithmetic);
     if (into === undefined || into.cost + cost > largest) {
-      into = { method, indices: [], cost: 0 };
-      open.set(method.name, into);
+      into = { method, arithmetic, indices: [], cost: 0 };
+      ofMethod.set(arithmetic, into);
       bundles.push(into);
     }
     into.indices.push(i);

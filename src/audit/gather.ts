@@ -19,6 +19,7 @@ type Mutable<T> = { -readonly [K in keyof T]: T[K] };
 /** Puts the outcomes of one method's tasks in their places. */
 export function gather(
   method: MethodDefinition,
+  arithmetic: MethodRuns["arithmetic"],
   role: MethodRuns["role"],
   ladder: LadderPlan,
   ensembleRung: number,
@@ -39,13 +40,20 @@ export function gather(
     on: none<Reading>(ENSEMBLE_SIZE),
     off: none<Reading>(ENSEMBLE_SIZE),
     early: none<readonly number[]>(ENSEMBLE_SIZE),
+    lessRounded: { on: null as Reading | null, off: null as Reading | null },
   };
   const extras: Mutable<Extras> = { ledger: null, halvedLedger: null, secondReading: null };
 
   tasks.forEach(({ method: of, slot }, i) => {
     if (of !== method) return;
     const outcome = outcomes[i]!;
-    if (outcome.kind === "run" && (slot.in === "rung" || slot.in === "ensemble") && slot.field !== "early") {
+    if (outcome.kind === "run" && slot.in === "less-rounded") {
+      ensemble.lessRounded[slot.field] = outcome.reading;
+    } else if (
+      outcome.kind === "run" &&
+      (slot.in === "rung" || slot.in === "ensemble") &&
+      slot.field !== "early"
+    ) {
       if (slot.in === "rung") rungs[slot.rung]![slot.field] = outcome.reading;
       else ensemble[slot.field][slot.member] = outcome.reading;
     } else if (outcome.kind === "early") {
@@ -62,6 +70,7 @@ export function gather(
   if (sharedNull) {
     for (const rung of rungs) rung.off = rung.on;
     ensemble.off = ensemble.on;
+    ensemble.lessRounded.off = ensemble.lessRounded.on;
   }
-  return { runs: { method, role, rungs, finerEarly, ensemble }, extras };
+  return { runs: { method, arithmetic, role, rungs, finerEarly, ensemble }, extras };
 }

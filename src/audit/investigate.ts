@@ -43,6 +43,8 @@ export async function investigate(
   const subtracted = baseline === "subtracted";
   const authors = claim.solution?.method ?? null;
   const methods = authors === null ? [...witnesses] : [authors, ...witnesses];
+  const arithmeticOf = (method: MethodDefinition): "double" | "single" =>
+    method === authors ? claim.solution!.arithmetic : "double";
   const orbits = nominalLength(scenario) / scenario.period;
   const perStep = methods.reduce((sum, method) => sum + costPerStep(method), 0);
   const cost = (stepsPerOrbit: number): number => stepsPerOrbit * orbits * perStep * (subtracted ? 2 : 1);
@@ -69,7 +71,7 @@ export async function investigate(
     return { ladder, ensembleRung };
   };
   const tasks = methods.flatMap((method) =>
-    planTasks(method, scenario, own(method).ladder, own(method).ensembleRung, {
+    planTasks(method, arithmeticOf(method), scenario, own(method).ladder, own(method).ensembleRung, {
       nullRuns: subtracted || method === authors,
       ledger: method === authors,
       ensemble: !idle(method),
@@ -83,6 +85,7 @@ export async function investigate(
   const gathered = methods.map((method) =>
     gather(
       method,
+      arithmeticOf(method),
       method === authors ? "solution" : "witness",
       own(method).ladder,
       own(method).ensembleRung,

@@ -1,4 +1,5 @@
 import type { EquationsDefinition } from "../equations/definition.js";
+import type { LoopArithmetic } from "../kernel/arithmetic.js";
 import type { LedgerReading } from "../measure/ledger.js";
 import type { PreparedScenario } from "../measure/run.js";
 import type { MethodDefinition } from "../methods/definition.js";
@@ -29,6 +30,7 @@ export interface ReferenceJob {
 export interface Job {
   readonly system: SystemRecipe;
   readonly method: MethodDefinition;
+  readonly arithmetic: LoopArithmetic;
   readonly scenario: PreparedScenario;
   readonly tasks: readonly Task[];
 }

@@ -1,3 +1,4 @@
+import { mean } from "simple-statistics";
 import type { QuotedUnit } from "../claim/claim.js";
 import { type Difference, isClear, type LadderPoint } from "../convergence/differences.js";
 import { analyseLadder, type LadderAnalysis } from "../convergence/ladder.js";
@@ -36,7 +37,7 @@ export function analyse(
   unit: QuotedUnit,
   subtracted: boolean,
 ): AnalysedLadder {
-  const push = coefficientPush(scenario, unit);
+  const push = coefficientPush(runs, scenario, unit);
   const raw = points(runs, unit, push, (on) => on);
   const off = points(runs, unit, push, (_, off) => off);
   const difference = differencePoints(runs, unit, push);
@@ -62,12 +63,7 @@ function points(
   push: number,
   pick: (on: Reading | null, off: Reading | null) => Reading | null,
 ): LadderPoint[] {
-  return withFloor(
-    runs,
-    push,
-    runs.rungs.map((rung) => figureOf(pick(rung.on, rung.off), unit)),
-    runs.ensemble.on.map((on, i) => figureOf(pick(on, runs.ensemble.off[i] ?? null), unit)),
-  );
+  return withFloor(runs, push, (on, off) => figureOf(pick(on, off), unit));
 }
 
 function differencePoints(runs: MethodRuns, unit: QuotedUnit, push: number): LadderPoint[] {
@@ -75,38 +71,50 @@ function differencePoints(runs: MethodRuns, unit: QuotedUnit, push: number): Lad
     const [value, base] = [figureOf(on, unit), figureOf(off, unit)];
     return value === null || base === null ? null : value - base;
   };
-  return withFloor(
-    runs,
-    push,
-    runs.rungs.map((rung) => difference(rung.on, rung.off)),
-    runs.ensemble.on.map((on, i) => difference(on, runs.ensemble.off[i] ?? null)),
-  );
+  return withFloor(runs, push, difference);
 }
 
 /**
- * What rounded coefficients may do to the advance, in the claim's unit. They push every step, and every
- * member of an ensemble, the same way: by a unit of the last place of the increments, which add up to 2π
- * times the state in each orbit; and a push across the orbit turns the apsis by 1/e times as much.
+ * What coefficients rounded to doubles may do to the advance, in the claim's unit. They push every step, and
+ * every member of an ensemble, the same way: by a unit of the last place of the increments, which add up to 2π
+ * times the state in each orbit; and a push across the orbit turns the apsis by 1/e times as much. In single
+ * precision the run in doubles shows what they do.
  */
-function coefficientPush({ eccentricity, period }: PreparedScenario, unit: QuotedUnit): number {
+function coefficientPush(
+  { arithmetic }: MethodRuns,
+  { eccentricity, period }: PreparedScenario,
+  unit: QuotedUnit,
+): number {
+  if (arithmetic === "single") return 0;
   const perOrbit = (2 * Math.PI * Number.EPSILON) / eccentricity / unit.radians;
   return unit.per === "orbit" ? perOrbit : (perOrbit * unit.per) / period;
 }
 
 /**
- * Rounding walks at random: it grows as the square root of the number of steps (Brouwer, A. J. 46, 149,
- * 1937). On rungs coarser than the ensemble's it is not taken to be less. What is common to all members does
- * not show in their spread and is added to it.
+ * What rounding does to each rung's figure. Its random part is the spread of the ensemble, its common part how
+ * far the ensemble's mean is from the run that rounds less. Both walk at random with the number of steps, as
+ * its square root (D. Brouwer, A. J. 46, 149, 1937); on rungs coarser than the ensemble's they are not taken to
+ * be less.
  */
 function withFloor(
   runs: MethodRuns,
   push: number,
-  values: readonly (number | null)[],
-  members: readonly (number | null)[],
+  figure: (on: Reading | null, off: Reading | null) => number | null,
 ): LadderPoint[] {
-  const spread = roundingHalfWidth(members);
-  const growth = (k: number) => Math.max(1, 2 ** ((k - runs.ensemble.rung) / 2));
-  return values.map((value, k) => ({ value, floor: Math.hypot(push, (spread ?? 0) * growth(k)) }));
+  const { ensemble, rungs } = runs;
+  const members = ensemble.on.map((on, i) => figure(on, ensemble.off[i] ?? null));
+  const spread = roundingHalfWidth(members) ?? 0;
+  const common = commonRounding(members, figure(ensemble.lessRounded.on, ensemble.lessRounded.off));
+  const growth = (k: number) => Math.max(1, 2 ** ((k - ensemble.rung) / 2));
+  return rungs.map(({ on, off }, k) => ({
+    value: figure(on, off),
+    floor: Math.hypot(push, Math.hypot(spread, common) * growth(k)),
+  }));
+}
+
+function commonRounding(members: readonly (number | null)[], lessRounded: number | null): number {
+  const given = members.filter((figure) => figure !== null);
+  return lessRounded === null || given.length === 0 ? 0 : Math.abs(mean(given) - lessRounded);
 }
 
 function subtractedAnalysis(

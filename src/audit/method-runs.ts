@@ -4,6 +4,7 @@ import type { Reading } from "./job.js";
 /** Everything that was run with one method. */
 export interface MethodRuns {
   readonly method: MethodDefinition;
+  readonly arithmetic: "double" | "single";
   readonly role: "solution" | "witness";
   readonly rungs: readonly RungRuns[];
   /** Early states of finer steps than the ladder's, each half the last, for the state order alone. */
@@ -25,4 +26,6 @@ export interface Ensemble {
   readonly on: readonly (Reading | null)[];
   readonly off: readonly (Reading | null)[];
   readonly early: readonly (readonly number[] | null)[];
+  /** The unperturbed run again, with compensated summation; of a run in single precision, in double. */
+  readonly lessRounded: { readonly on: Reading | null; readonly off: Reading | null };
 }

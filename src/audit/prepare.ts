@@ -1,5 +1,6 @@
 import type { Claim } from "../claim/claim.js";
 import { appliesTo } from "../kernel/applies-to.js";
+import { roundToSingle } from "../kernel/single.js";
 import { type CompiledSystem, compileSystem } from "../kernel/system.js";
 import type { PreparedScenario } from "../measure/run.js";
 import { isPlanar, openParameters, prepareScenario } from "../measure/start.js";
@@ -40,7 +41,7 @@ export function prepare(claim: Claim): Prepared | { readonly problem: string } {
     const applies = appliesTo(method, system);
     if (!applies.ok) return { problem: applies.reason };
   }
-  const authorsStep = claim.solution === null ? null : stepLength(claim.solution.step, scenario.period);
+  const authorsStep = claim.solution === null ? null : stepLength(claim.solution, scenario.period);
   if (authorsStep !== null && authorsStep >= scenario.period) {
     const orbits = (authorsStep / scenario.period).toPrecision(3);
     return {
@@ -57,6 +58,8 @@ export function prepare(claim: Claim): Prepared | { readonly problem: string } {
   };
 }
 
-function stepLength(step: NonNullable<Claim["solution"]>["step"], period: number): number {
-  return step.kind === "length" ? step.length : period / step.count;
+/** In single precision the step itself is a single. */
+function stepLength({ step, arithmetic }: NonNullable<Claim["solution"]>, period: number): number {
+  const length = step.kind === "length" ? step.length : period / step.count;
+  return arithmetic === "single" ? roundToSingle(length) : length;
 }

@@ -1,3 +1,4 @@
+import type { LoopArithmetic } from "../kernel/arithmetic.js";
 import { compileStepLoop } from "../kernel/compile.js";
 import { conservedObservables } from "../kernel/observables.js";
 import type { StepLoop } from "../kernel/step-loop.js";
@@ -35,12 +36,18 @@ function systemOf(recipe: SystemRecipe): Built {
 }
 
 /** The step loop of a method over a system, built once a thread. */
-export function loopOf(recipe: SystemRecipe, method: MethodDefinition): StepLoop {
+export function loopOf(
+  recipe: SystemRecipe,
+  method: MethodDefinition,
+  arithmetic: LoopArithmetic = "double",
+): StepLoop {
   const { system, loops } = systemOf(recipe);
-  let loop = loops.get(method.name);
+  // By its coefficients: an author's own may go by any name.
+  const key = JSON.stringify([arithmetic, method]);
+  let loop = loops.get(key);
   if (loop === undefined) {
-    loop = compileStepLoop(system, method);
-    loops.set(method.name, loop);
+    loop = compileStepLoop(system, method, arithmetic);
+    loops.set(key, loop);
   }
   return loop;
 }
@@ -49,7 +56,7 @@ export function loopOf(recipe: SystemRecipe, method: MethodDefinition): StepLoop
 export default function runJob<J extends Job | ReferenceJob>(job: J): Done<J>;
 export default function runJob(job: Job | ReferenceJob): Outcome[] | PreciseOrbit {
   if ("effect" in job) return follow(job);
-  const loop = loopOf(job.system, job.method);
+  const loop = loopOf(job.system, job.method, job.arithmetic);
   return job.tasks.map((task) => runTask(job, loop, task));
 }
 

@@ -1,4 +1,5 @@
 import { ENSEMBLE_SIZE, lastBitEnsemble } from "../convergence/rounding.js";
+import { EPSILON, type LoopArithmetic } from "../kernel/arithmetic.js";
 import { earlySteps } from "../measure/early-state.js";
 import { nominalLength } from "../measure/limits.js";
 import type { PreparedScenario } from "../measure/run.js";
@@ -11,11 +12,13 @@ export type Slot =
   | { readonly in: "rung"; readonly rung: number; readonly field: "on" | "off" | "early" }
   | { readonly in: "finer-early"; readonly index: number }
   | { readonly in: "ensemble"; readonly member: number; readonly field: "on" | "off" | "early" }
+  | { readonly in: "less-rounded"; readonly field: "on" | "off" }
   | { readonly in: "ledger"; readonly halved: boolean }
   | { readonly in: "second-reading" };
 
 export interface PlannedTask {
   readonly method: MethodDefinition;
+  readonly arithmetic: LoopArithmetic;
   readonly task: Task;
   readonly slot: Slot;
   /** Evaluations that it is expected to take. */
@@ -44,12 +47,14 @@ export function costPerStep(method: MethodDefinition): number {
 /**
  * Everything to run with one method.
  *
+ * @param arithmetic of the method's own runs
  * @param ensembleRung the rung on which rounding is measured
  * @param wanted null runs where the claim subtracts them and for the author's method; the ensemble where a
  *   ladder may come down to rounding; the ledger, and at half the step too, for the author's method
  */
 export function planTasks(
   method: MethodDefinition,
+  arithmetic: "double" | "single",
   scenario: PreparedScenario,
   ladder: LadderPlan,
   ensembleRung: number,
@@ -62,8 +67,13 @@ export function planTasks(
   const effects: readonly ("on" | "off")[] = separateNull ? ["on", "off"] : ["on"];
   const coarse = earlySteps(ladder.steps[0]!, scenario.period);
   const tasks: PlannedTask[] = [];
+  // The order of a method is that of its truncation, which single precision would drown.
+  const arithmeticOf = (slot: Slot): LoopArithmetic => {
+    if (slot.in === "less-rounded") return arithmetic === "single" ? "double" : "compensated";
+    return slot.in === "finer-early" || ("field" in slot && slot.field === "early") ? "double" : arithmetic;
+  };
   const add = (slot: Slot, task: Task, cost: number): void => {
-    tasks.push({ method, task, slot, cost });
+    tasks.push({ method, arithmetic: arithmeticOf(slot), task, slot, cost });
   };
   const run = (slot: Slot, step: number, effect: "on" | "off", state?: readonly number[]): void => {
     const cost = spanCost(step);
@@ -82,11 +92,16 @@ export function planTasks(
     const halvings = ladder.steps.length + index;
     early({ in: "finer-early", index }, ladder.steps[0]! / 2 ** halvings, halvings);
   }
-  const members = lastBitEnsemble(scenario.state);
+  const members = lastBitEnsemble(scenario.state, EPSILON[arithmetic]);
+  const inDouble = lastBitEnsemble(scenario.state);
   for (let member = 0; wanted.ensemble && member < ENSEMBLE_SIZE; member++) {
     const step = ladder.steps[ensembleRung]!;
     for (const field of effects) run({ in: "ensemble", member, field }, step, field, members[member]!);
-    early({ in: "ensemble", member, field: "early" }, step, ensembleRung, members[member]!);
+    early({ in: "ensemble", member, field: "early" }, step, ensembleRung, inDouble[member]!);
+  }
+  if (wanted.ensemble) {
+    const step = ladder.steps[ensembleRung]!;
+    for (const field of effects) run({ in: "less-rounded", field }, step, field);
   }
   if (wanted.ledger) {
     const step = ladder.steps[ladder.authors ?? ensembleRung]!;

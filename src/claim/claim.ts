@@ -72,6 +72,8 @@ export type Span = { readonly text: string } & (
 
 export interface Solution {
   readonly method: MethodDefinition;
+  /** Of the author's program. */
+  readonly arithmetic: "double" | "single";
   readonly step: { readonly text: string } & (
     | { readonly kind: "per-orbit"; readonly count: number }
     /** s (or rad in angle form); `unit` as written and its size, to write a step back as the author would. */

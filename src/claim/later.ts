@@ -59,12 +59,6 @@ const RULES: readonly Rule[] = [
     wanted: "a fixed step: step or steps-per-orbit",
   },
   {
-    path: ["solution", "arithmetic"],
-    applies: (value) => value === "single",
-    found: "single precision",
-    wanted: "double",
-  },
-  {
     path: ["solution", "read-off"],
     applies: (value) => value === "nearest-sample" || value === "parabola",
     found: "a reading off the output samples",

@@ -25,7 +25,7 @@ const solution = z
       .meta({ description: "Instead of step: the osculating Newtonian period in so many steps." })
       .optional(),
     arithmetic: z
-      .enum(["double"])
+      .enum(["double", "single"])
       .meta({ description: "The arithmetic of the author's program." })
       .optional(),
     "read-off": z.enum(["refined"]).meta({ description: "How the author located the apsis." }).optional(),

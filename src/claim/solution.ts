@@ -14,7 +14,9 @@ export function readSolution(
 ): Solution | null {
   const step = readStep(raw, equations, report);
   const method = raw.method === undefined ? undefined : findMethod(raw.method);
-  return method === undefined || step === null ? null : { method, step };
+  return method === undefined || step === null
+    ? null
+    : { method, arithmetic: raw.arithmetic ?? "double", step };
 }
 
 function readStep(

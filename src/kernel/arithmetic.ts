@@ -1,6 +1,13 @@
 /** What a step loop computes in; compensated is double with the rounding of each state's sums carried along. */
 export type LoopArithmetic = "double" | "single" | "compensated";
 
+/** Distance from 1 to the next number. */
+export const EPSILON: Readonly<Record<LoopArithmetic, number>> = {
+  double: Number.EPSILON,
+  compensated: Number.EPSILON,
+  single: 2 ** -23,
+};
+
 /** How a step loop is written, as its arithmetic wants it. */
 export interface LoopStyle {
   /** What a step adds to a state is rounded into it: where set, what was lost goes with the next step. */

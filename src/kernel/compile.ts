@@ -1,5 +1,6 @@
 import type { MethodDefinition } from "../methods/definition.js";
 import { type LoopArithmetic, styles } from "./arithmetic.js";
+import { withoutInfinity } from "./infinity.js";
 import { inSingle } from "./single.js";
 import type { StepLoop } from "./step-loop.js";
 import type { CompiledSystem } from "./system.js";
@@ -23,6 +24,8 @@ export function compileStepLoop(
   const count = system.parameters.length;
   const { run, memory, parametersAt } = compileModule(code, one, ioLength, count)!;
   const inputs = 2 * dimension + 1;
+  // Rounding to single precision makes no sense of an infinite double.
+  const finite = arithmetic === "single" ? withoutInfinity : (value: number): number => value;
   return {
     method,
     dimension,
@@ -30,7 +33,7 @@ export function compileStepLoop(
     evaluationsPerStep: body.evaluationsPerStep,
     advance(io, parameters, step, steps) {
       for (let i = 0; i < inputs; i++) memory[i] = io[i]!;
-      for (let i = 0; i < count; i++) memory[parametersAt + i] = parameters[i]!;
+      for (let i = 0; i < count; i++) memory[parametersAt + i] = finite(parameters[i]!);
       const taken = run(step, Math.min(steps, MOST_STEPS));
       for (let i = 0; i < ioLength; i++) io[i] = memory[i]!;
       return taken;

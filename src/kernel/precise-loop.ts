@@ -5,6 +5,7 @@ import type { MethodDefinition } from "../methods/definition.js";
 import { styles } from "./arithmetic.js";
 import type { Code, Operation } from "./code.js";
 import { inDoubleDouble } from "./double-double.js";
+import { withoutInfinity } from "./infinity.js";
 import type { CompiledSystem } from "./system.js";
 import { one } from "./wasm/instructions.js";
 import { compileModule, type Mathematics } from "./wasm/module.js";
@@ -36,16 +37,8 @@ function mathematics(): Mathematics {
   return { ...(Object.fromEntries(wrapped) as Record<Operation["op"], () => number>), rest: () => rest };
 }
 
-/**
- * Infinity as a parameter, where the null run has it: error-free transformations make no sense of an infinite
- * double. Against any speed of an orbit this is as good, to far more digits than there are.
- */
-const FAR = 2 ** 300;
-
 export const withoutInfinities = (values: readonly DoubleDouble[]): DoubleDouble[] =>
-  values.map((value) =>
-    Number.isFinite(value.high) ? value : { high: Math.sign(value.high) * FAR, low: 0 },
-  );
+  values.map(({ high, low }) => ({ high: withoutInfinity(high), low }));
 
 /** @param parameters how many there are */
 export function compilePrecise(code: Code, ioLength: number, parameters: number): PreciseFunction {

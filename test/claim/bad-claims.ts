@@ -193,13 +193,6 @@ export const badClaims: readonly (readonly [
     /a fixed step/,
   ],
   [
-    "arithmetic-single.yaml",
-    [16, 3],
-    "solution.arithmetic",
-    /single precision, part of the claim format that this version does not carry out/,
-    /double/,
-  ],
-  [
     "read-off-nearest-sample.yaml",
     [16, 3],
     "solution.read-off",

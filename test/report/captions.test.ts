@@ -73,6 +73,7 @@ const result: ClaimResult = {
   asSolved: { value: 42, null: 1, error: 2, halfWidth: 0.001 },
   crossReading: null,
   best: { value: 40, halfWidth: 1e-6, from: "extrapolation", says: "" },
+  reference: null,
   checks: [check("reproduces", "pass"), check("carries-digits", "fail")],
   budget: {
     truncation: 2,
