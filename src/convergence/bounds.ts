@@ -1,6 +1,7 @@
 import type { Difference, LadderPoint } from "./differences.js";
 import type { Estimate } from "./estimators/estimator.js";
-import { SAFETY_OUTSIDE, tightest } from "./extrapolation.js";
+import { tightest } from "./extrapolation.js";
+import { SAFETY_OUTSIDE } from "./safety.js";
 
 /**
  * The limit where rounding is reached before a window shows: among the finest differences that are all
