@@ -11,7 +11,7 @@ export interface Score {
   readonly coverage: number;
   /** Median of half-width over true error, over those. */
   readonly tightness: number;
-  /** The same without ladders whose true error is at rounding: within the floor of the finest rung. */
+  /** The same without the limits at rounding: those whose true error is within the floor of the finest rung. */
   readonly tightnessAbove: number;
   /** Median of half-width over the error of the finest figure itself: what the whole procedure gains. */
   readonly gain: number;
