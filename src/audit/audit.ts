@@ -1,7 +1,7 @@
 import type { Claim } from "../claim/claim.js";
 import type { ClaimResult, PassageSeries } from "../result/result.js";
 import { judge } from "../verdict/judge.js";
-import { bestOf, referenceOf } from "./best.js";
+import { bestOf, intervalOf, referenceOf } from "./best.js";
 import { evidenceOf } from "./evidence.js";
 import type { ExecuteOptions } from "./execute.js";
 import { type Investigation, investigate } from "./investigate.js";
@@ -29,7 +29,8 @@ export async function createAuditor({ workers }: { readonly workers: number }): 
   };
 }
 
-async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions): Promise<ClaimResult> {
+/** Audits one claim on a pool. */
+export async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions): Promise<ClaimResult> {
   const began = performance.now();
   const prepared = prepare(claim);
   if ("problem" in prepared) return undetermined(claim.file, prepared.problem, claim, claim);
@@ -55,6 +56,7 @@ async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions):
       value: best?.value ?? null,
       halfWidth: best?.halfWidth ?? null,
       from: best?.from ?? null,
+      extrapolated: investigation.extrapolated && intervalOf(investigation.extrapolated),
       says: bestInWords(investigation, unit.text),
     },
     reference: referenceOf(investigation, unit.text),

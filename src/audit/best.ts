@@ -1,3 +1,4 @@
+import type { Estimate } from "../convergence/extrapolation.js";
 import type { ClaimResult } from "../result/result.js";
 import type { Investigation } from "./investigate.js";
 
@@ -18,6 +19,8 @@ export function bestOf({ reference, extrapolated }: Investigation): Best | null 
   const { value, halfWidth, sound } = extrapolated;
   return { value, halfWidth, from: "extrapolation", sound };
 }
+
+export const intervalOf = ({ value, halfWidth }: Estimate): Estimate => ({ value, halfWidth });
 
 export function referenceOf({ reference }: Investigation, unit: string): ClaimResult["reference"] {
   if ("none" in reference) {

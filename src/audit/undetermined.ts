@@ -22,7 +22,7 @@ export function undetermined(
     claimed: claim?.claimed === undefined ? null : claimedOf(claim.claimed),
     asSolved: { value: null, null: null, error: null, halfWidth: null },
     crossReading: null,
-    best: { value: null, halfWidth: null, from: null, says: "Nothing was run." },
+    best: { value: null, halfWidth: null, from: null, extrapolated: null, says: "Nothing was run." },
     reference: null,
     checks: [
       { name: "reproduces", outcome: "not-checked", figure: null, limit: null, unit: "", says: reason },

@@ -1,8 +1,6 @@
 import { CallError } from "./call-error.js";
 import type { Command } from "./command.js";
-
-/** More threads than any machine has use for. */
-const MOST_WORKERS = 256;
+import { threads, workersOption } from "./threads.js";
 
 const options = {
   out: {
@@ -17,11 +15,7 @@ const options = {
     requiresArg: true,
     describe: "Write the result as JSON to this file; - is standard output, in place of the summary",
   },
-  workers: {
-    type: "string",
-    requiresArg: true,
-    describe: "Threads to work on; as many as cores when left out",
-  },
+  workers: workersOption,
   quiet: { type: "boolean", describe: "One line a claim, and no progress" },
   colour: {
     type: "string",
@@ -70,11 +64,3 @@ export const audit: Command = {
         },
       ),
 };
-
-function threads(text: string): number {
-  const count = /^\d{1,4}$/.test(text) ? Number(text) : 0;
-  if (count < 1 || count > MOST_WORKERS) {
-    throw new CallError(`--workers: found '${text}'; wanted a whole number from 1 to ${MOST_WORKERS}`);
-  }
-  return count;
-}

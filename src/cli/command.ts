@@ -23,6 +23,12 @@ export const commands: readonly Listed[] = [
     load: async () => (await import("./audit.js")).audit,
   },
   {
+    name: "calibrate",
+    takes: "",
+    does: "Audit the auditor: claims with known truth",
+    load: async () => (await import("./calibrate.js")).calibrate,
+  },
+  {
     name: "catalog",
     takes: "[WHAT]",
     does: "Show equations, methods, quantities, units",

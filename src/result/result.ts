@@ -81,6 +81,8 @@ export interface ClaimResult {
     readonly value: number | null;
     readonly halfWidth: number | null;
     readonly from: "reference" | "extrapolation" | null;
+    /** What the witnesses' ladders alone lead to; null where they bound nothing. */
+    readonly extrapolated: { readonly value: number; readonly halfWidth: number } | null;
     /** In words: which methods carry it and how far they agree. */
     readonly says: string;
   };

@@ -72,7 +72,7 @@ const result: ClaimResult = {
   },
   asSolved: { value: 42, null: 1, error: 2, halfWidth: 0.001 },
   crossReading: null,
-  best: { value: 40, halfWidth: 1e-6, from: "extrapolation", says: "" },
+  best: { value: 40, halfWidth: 1e-6, from: "extrapolation", extrapolated: null, says: "" },
   reference: null,
   checks: [check("reproduces", "pass"), check("carries-digits", "fail")],
   budget: {

@@ -170,6 +170,7 @@ describe("distances", () => {
     value,
     halfWidth,
     from: null,
+    extrapolated: null,
     says: "",
   });
 

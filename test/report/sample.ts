@@ -72,7 +72,13 @@ const solved: ClaimResult = {
   },
   asSolved: { value: BEST + OFF, null: OFF, error: OFF, halfWidth: 2.2e-6 },
   crossReading: { value: 62.01, halfWidth: 4.8 },
-  best: { value: BEST, halfWidth: 9.3e-7, from: "extrapolation", says: "The limit of a witness." },
+  best: {
+    value: BEST,
+    halfWidth: 9.3e-7,
+    from: "extrapolation",
+    extrapolated: null,
+    says: "The limit of a witness.",
+  },
   reference: null,
   checks: NAMES.map((name, k) => ({
     name,
@@ -161,7 +167,7 @@ export function everyKind(): readonly ClaimResult[] {
     digits: null,
     asSolved: none,
     crossReading: null,
-    best: { value: null, halfWidth: null, from: null, says: "" },
+    best: { value: null, halfWidth: null, from: null, extrapolated: null, says: "" },
     budget: null,
     remedy: null,
     passages: null,

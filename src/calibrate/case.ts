@@ -1,0 +1,155 @@
+import { toDouble } from "../arithmetic/double-double.js";
+import { figureOf } from "../audit/figure.js";
+import type { Outcome } from "../audit/job.js";
+import type { JobPool } from "../audit/pool.js";
+import { type Prepared, prepare } from "../audit/prepare.js";
+import type { Claim } from "../claim/claim.js";
+import { parseClaim } from "../claim/read.js";
+import { lastBitEnsemble } from "../convergence/rounding.js";
+import { EPSILON } from "../kernel/arithmetic.js";
+import type { Draw } from "./draw.js";
+import type { Known } from "./oracle.js";
+import { type Quote, quote, quoteDigits } from "./quote.js";
+import type { Random } from "./random.js";
+import { truthOf } from "./truth.js";
+
+/** A claim with all that is known of it from outside the audit. */
+export interface Case {
+  readonly draw: Draw;
+  readonly claim: Claim;
+  readonly known: Known;
+  /** Half-width of the truth itself. */
+  readonly truthHalfWidth: number;
+  /** The claim as its author would have written it. */
+  readonly text: string;
+}
+
+/** Perturbed runs that tell of rounding, and how many times their farthest may be exceeded. */
+const PERTURBED = 3;
+const ROUNDING_SHARE = 2;
+/** A margin finer than this part of the figure asks for more than its double holds. */
+const FINEST_MARGIN = 1e-12;
+
+/**
+ * Makes a claim of what was drawn: runs the author's solution, and quotes its figure.
+ *
+ * @returns null where the scenario cannot be run, or its truth is not known
+ */
+export async function makeCase(
+  draw: Draw,
+  random: Random,
+  pool: JobPool,
+  name: string,
+): Promise<Case | null> {
+  // What is quoted follows from the run; a placeholder stands for it until then.
+  const placeholder = claimOf(draw, { text: `1 ${draw.unit}`, value: 1, halfWidth: 1 }, name);
+  const prepared = prepare(placeholder.claim);
+  if ("problem" in prepared) return null;
+  const truth = truthOf(placeholder.claim, prepared);
+  if (truth === null) return null;
+  const { runs, rounding } = await authorsRuns(draw, placeholder.claim, prepared, pool);
+  const quoted = quoteFor(draw, toDouble(truth.value), runs[0], rounding, random);
+  const { claim, text } = claimOf(draw, quoted, name);
+  return {
+    draw,
+    claim,
+    text,
+    truthHalfWidth: truth.halfWidth,
+    known: {
+      truth: toDouble(truth.value),
+      claimed: { value: claim.claimed.value, halfWidth: claim.claimed.halfWidth },
+      runs,
+      rounding,
+      isMistyped: draw.isMistyped,
+    },
+  };
+}
+
+function claimOf(draw: Draw, quoted: Quote, name: string): { readonly claim: Claim; readonly text: string } {
+  const text = JSON.stringify({
+    cupel: "claim/1",
+    title: `${name}, an invented system: ${draw.kind}`,
+    claimed: { quantity: "apsidal-advance", value: quoted.text, baseline: draw.baseline },
+    scenario: draw.scenario,
+    solution: {
+      method: draw.method.name,
+      "steps-per-orbit": draw.stepsPerOrbit,
+      arithmetic: draw.arithmetic,
+    },
+  });
+  const read = parseClaim(new TextEncoder().encode(text), name);
+  if (!read.ok) throw new TypeError(`a drawn claim cannot be read: ${JSON.stringify(read.problems)}`);
+  // A claim file names a method; the slip is in the author's program.
+  return { claim: { ...read.claim, solution: { ...read.claim.solution!, method: draw.method } }, text };
+}
+
+/** The author's own figure, the same at finer steps, and how far rounding moves it. */
+async function authorsRuns(
+  { method, arithmetic, baseline }: Draw,
+  { claimed: { unit } }: Claim,
+  { recipe, scenario, authorsStep }: Prepared,
+  pool: JobPool,
+): Promise<Pick<Known, "runs" | "rounding">> {
+  const effects =
+    baseline === "subtracted" && scenario.nullParameters !== null
+      ? (["on", "off"] as const)
+      : (["on"] as const);
+  const evaluations = Number.POSITIVE_INFINITY;
+  const members = lastBitEnsemble(scenario.state, EPSILON[arithmetic]).slice(0, PERTURBED);
+  const step = authorsStep!;
+  const starts = [
+    { step },
+    { step: step / 2 },
+    { step: step / 4 },
+    ...members.map((state) => ({ step, state })),
+  ];
+  const tasks = starts.flatMap((start) =>
+    effects.map((effect) => ({ kind: "run" as const, effect, evaluations, ...start })),
+  );
+  const outcomes = await pool.run({ system: recipe, method, arithmetic, scenario, tasks });
+  const read = (outcome: Outcome): number | null =>
+    outcome.kind === "run" ? figureOf(outcome.reading, unit) : null;
+  const figures = starts.map((_, i) => {
+    const [on = null, off = null] = outcomes.slice(i * effects.length, (i + 1) * effects.length).map(read);
+    if (on === null || baseline === "included") return on;
+    // Where nothing can vanish the run is its own null run.
+    if (effects.length === 1) return 0;
+    return off === null ? null : on - off;
+  });
+  const [at, half, quarter, ...moved] = figures;
+  const off = moved.map((figure) => (figure === null || at === null ? 0 : Math.abs(figure - at)));
+  return { runs: [at!, half!, quarter!], rounding: ROUNDING_SHARE * Math.max(...off) };
+}
+
+function quoteFor(
+  { kind, unit }: Draw,
+  truth: number,
+  figure: number | null,
+  rounding: number,
+  random: Random,
+): Quote {
+  // An author whose run gave nothing quotes what the equations should give.
+  const value = figure ?? truth;
+  const error = Math.max(
+    Math.abs(value - truth) + rounding,
+    FINEST_MARGIN * Math.abs(value),
+    Number.MIN_VALUE ** 0.1,
+  );
+  switch (kind) {
+    case "sound":
+      return quote(value, error * random.decades(5, 1000), unit);
+    case "over-quoted":
+      return quote(
+        value,
+        Math.max((error / 3) * random.decades(1e-3, 0.6), FINEST_MARGIN * Math.abs(value)),
+        unit,
+      );
+    case "artefact":
+      return value === 0 ? quote(0, error, unit) : quoteDigits(value, random.pick([2, 3, 4]), unit);
+    case "contradicted": {
+      const margin = error * random.decades(0.1, 100);
+      const shift = (random.chance(0.5) ? 1 : -1) * (margin + error) * random.decades(2.5, 100);
+      return quote(value + shift, margin, unit);
+    }
+  }
+}
