@@ -3,7 +3,10 @@ import type { Estimate } from "./estimators/estimator.js";
 import { NEAR_WHOLE, nextColumn } from "./extrapolants.js";
 import { rungEstimates } from "./rung-estimates.js";
 import { SAFETY_IN_WINDOW, SAFETY_OUTSIDE } from "./safety.js";
+import { unsettledEstimate } from "./unsettled.js";
 import { findWindow, type Window } from "./window.js";
+
+export type { Estimate } from "./estimators/estimator.js";
 
 /** Three exponents of an extrapolant. */
 const FEWEST_DIFFERENCES = 4;
@@ -15,19 +18,24 @@ const FEWEST_DIFFERENCES = 4;
  * their own, and so on (L. F. Richardson and J. A. Gaunt, Phil. Trans. R. Soc. A 226, 299 (1927)). A column of
  * them counts where its own convergence is seen: where it has a window of a higher power. Its next correction
  * is then its error, and is not applied: an extrapolant that is not seen to converge may be a thousand times
- * better than the rung it comes from or no better at all, and the ladder does not tell which.
+ * better than the rung it comes from or no better at all, and a short ladder does not tell which.
  */
 export function extrapolateWindow(points: readonly LadderPoint[], window: Window): Estimate {
-  return tightest(candidates(points, window, SAFETY_IN_WINDOW));
+  const found = rungEstimates(points, window, SAFETY_IN_WINDOW);
+  const deeper = settledEstimates(points, window);
+  if (deeper.length > 0) return tightest([...found, ...deeper]);
+  const column = nextColumn(points, window);
+  const unsettled = column === null ? null : unsettledEstimate(window, column);
+  return tightest(unsettled === null ? found : [...found, unsettled]);
 }
 
-function candidates(points: readonly LadderPoint[], window: Window, safety: number): Estimate[] {
-  const found = rungEstimates(points, window, safety);
+/** Those of all columns that are seen to converge. */
+function settledEstimates(points: readonly LadderPoint[], window: Window): Estimate[] {
   const column = nextColumn(points, window);
-  if (column === null) return found;
+  if (column === null) return [];
   const next = findWindow(successiveDifferences(column.points));
-  if (next === null || !isSettled(next, column.power)) return found;
-  return [...found, ...candidates(column.points, next, SAFETY_OUTSIDE)];
+  if (next === null || !isSettled(next, column.power)) return [];
+  return [...rungEstimates(column.points, next, SAFETY_OUTSIDE), ...settledEstimates(column.points, next)];
 }
 
 /**

@@ -1,8 +1,8 @@
 import type { LadderPoint } from "./differences.js";
 import type { Estimate } from "./estimators/estimator.js";
-import { TO_99_PERCENT } from "./safety.js";
+import { TO_98_PERCENT } from "./safety.js";
 import { remainderOfTwoPowers } from "./two-powers.js";
-import type { Window } from "./window.js";
+import { lowestExponent, type Window } from "./window.js";
 
 /**
  * What each rung from the window's fourth on says of the limit: its own figure, and how far off it may be.
@@ -39,7 +39,7 @@ function unexplained(points: readonly LadderPoint[], { rungs }: Window, off: rea
 
 /**
  * The figures of the window's rungs, with the larger of two remainders: of one power at the lower end of the
- * exponent's interval, and of two powers. No order is below one, unless it is measured to be.
+ * exponent's interval, and of two powers.
  */
 function insideWindow(
   points: readonly LadderPoint[],
@@ -55,13 +55,10 @@ function insideWindow(
     const onePower = Math.abs(c) / (2 ** lowestExponent(window, Math.log2(b / c)) - 1);
     truncation = safety * Math.max(onePower, Math.abs(remainderOfTwoPowers(a, b, c)));
     const { value, floor } = points[differences[k]!.rung + 1]!;
-    estimates.push({ value: value!, halfWidth: truncation + Math.hypot(TO_99_PERCENT * floor, surprise) });
+    estimates.push({ value: value!, halfWidth: truncation + Math.hypot(TO_98_PERCENT * floor, surprise) });
   }
   return { estimates, truncation };
 }
-
-const lowestExponent = ({ interval }: Window, local: number): number =>
-  Math.min(Math.max(1, interval[0]), local);
 
 /**
  * Beyond the window the law carries on below the rounding floor; the figure stands as it is. What a
@@ -82,7 +79,7 @@ function beyondWindow(
     const surprise = Math.max(...off.slice(0, k + 1));
     return {
       value: value!,
-      halfWidth: truncation / falls ** (k + 1) + Math.hypot(TO_99_PERCENT * floor, surprise),
+      halfWidth: truncation / falls ** (k + 1) + Math.hypot(TO_98_PERCENT * floor, surprise),
     };
   });
 }

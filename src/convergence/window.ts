@@ -14,6 +14,13 @@ export interface Window {
 }
 
 /**
+ * The lower end of the exponent's interval, but no higher than another measure of it; and no order is below one,
+ * unless it is measured to be.
+ */
+export const lowestExponent = ({ interval }: Window, measured: number): number =>
+  Math.min(Math.max(1, interval[0]), measured);
+
+/**
  * How far exponents of one window may lie from their mean. The next term of the error expansion shifts a
  * local exponent by 2^-q from rung to rung; a quarter keeps the ratio of successive errors within 19 % of
  * 2^p, which the safety factor 1.25 of the extrapolation covers.

@@ -98,7 +98,7 @@ describe("on one corpus of ladders with known limits", () => {
         "verified-extrapolants",
         cases.filter((one) => one.kind === kind),
       );
-      expect(found.coverage, kind).toBeGreaterThanOrEqual(0.97);
+      expect(found.coverage, kind).toBeGreaterThanOrEqual(0.95);
     }
   });
 
