@@ -8,6 +8,6 @@ export const SAFETY_OUTSIDE = 3;
 /**
  * From the 95 % half-width of rounding, measured on eight runs, to 98 %: Student's t of seven degrees of freedom,
  * 2.998 / 2.365 (M. Abramowitz and I. Stegun, table 26.10). The limits of asymptotic ladders are to hold in 99 %,
- * and rounding is the larger part of the half-width in about half of them.
+ * and rounding is the larger part of the half-width in up to a third of them.
  */
 export const TO_98_PERCENT = 1.27;
