@@ -106,17 +106,27 @@ function deflated(coefficients: readonly DoubleDouble[], root: DoubleDouble): Do
   return quotient;
 }
 
-/** The root of a series nearest to 0 between -start, which is infinitely far out, and 0. */
+/**
+ * The root of a series between -start, which is infinitely far out, and 0: by Newton's method, kept in a bracket.
+ *
+ * @returns null where the series does not change from positive to negative: an orbit that escapes, or a start
+ * that is no periapsis
+ */
 function otherTurn(coefficients: readonly DoubleDouble[], start: DoubleDouble): DoubleDouble | null {
   const slope = derivative(coefficients);
-  // Newton's method from the middle finds it where the series is nearly a straight line, as it is.
-  let s = shift(start, -0.5);
+  let [out, near] = [negate(start), ZERO];
+  if (!(horner(coefficients, out).high > 0 && coefficients[0]!.high < 0)) return null;
+  // From the middle it gets there at once where the series is nearly a straight line, as it is.
+  let s = shift(out, 0.5);
   for (let k = 0; k < MOST_CORRECTIONS; k++) {
-    const correction = divide(horner(coefficients, s), horner(slope, s));
+    const value = horner(coefficients, s);
+    if (value.high > 0) out = s;
+    else near = s;
+    const correction = divide(value, horner(slope, s));
     const next = subtract(s, correction);
-    if (!(next.high < 0 && compare(next, negate(start)) > 0)) return null;
     if (Math.abs(correction.high) <= 2 ** -103 * Math.abs(start.high)) return next;
-    s = next;
+    const inside = compare(next, out) > 0 && compare(next, near) < 0;
+    s = inside ? next : shift(add(out, near), 0.5);
   }
   return s;
 }
