@@ -1,5 +1,6 @@
 import type { Claim } from "../claim/claim.js";
 import { nominalLength } from "../measure/limits.js";
+import type { PreparedScenario } from "../measure/run.js";
 import type { Ladder, LedgerEntry } from "../result/result.js";
 import type { Evidence, SolutionEvidence } from "../verdict/evidence.js";
 import { bestOf } from "./best.js";
@@ -26,7 +27,7 @@ export function evidenceOf(
       unit: claimed.unit.text,
       baseline: claimed.baseline,
     },
-    solution: solutionEvidence(claim, investigation, ladders[0]!, crossReading),
+    solution: solutionEvidence(claim, scenario, investigation, ladders[0]!, crossReading),
     best: best && { value: best.value, halfWidth: best.halfWidth, sound: best.sound },
     ladders,
     ledger,
@@ -38,7 +39,8 @@ export function evidenceOf(
 
 function solutionEvidence(
   claim: Claim,
-  { plan, solution, ladders, extrapolated }: Investigation,
+  scenario: PreparedScenario,
+  { plan, solution }: Investigation,
   ladder: Ladder,
   crossReading: SolutionEvidence["crossReading"],
 ): SolutionEvidence | null {
@@ -47,9 +49,9 @@ function solutionEvidence(
   const { on, off } = solution.runs.rungs[plan.authors]!;
   const { value, null: base, figure, stepsPerOrbit } = ladder.rungs[plan.authors]!;
   const { unit, baseline } = claim.claimed;
-  const carrier = ladders.find(({ runs }) => runs.method.name === extrapolated?.carrier)?.runs.rungs.at(-1);
-  const ofRun = readingOff(on, carrier?.on ?? null, unit);
-  const ofNull = baseline === "subtracted" ? readingOff(off, carrier?.off ?? null, unit) : 0;
+  const { step } = ladder.rungs[plan.authors]!;
+  const ofRun = readingOff(on, scenario, step, unit);
+  const ofNull = baseline === "subtracted" && off !== on ? readingOff(off, scenario, step, unit) : 0;
   return {
     method: method.name,
     formalOrder: method.order,

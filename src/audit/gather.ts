@@ -34,6 +34,7 @@ export function gather(
     off: null as Reading | null,
     early: null as readonly number[] | null,
   }));
+  const coarserEarly: (readonly number[] | null)[] = [];
   const finerEarly: (readonly number[] | null)[] = [];
   const ensemble = {
     rung: ensembleRung,
@@ -59,6 +60,7 @@ export function gather(
     } else if (outcome.kind === "early") {
       if (slot.in === "rung") rungs[slot.rung]!.early = outcome.state;
       else if (slot.in === "ensemble") ensemble.early[slot.member] = outcome.state;
+      else if (slot.in === "coarser-early") coarserEarly[slot.index] = outcome.state;
       else if (slot.in === "finer-early") finerEarly[slot.index] = outcome.state;
     } else if (outcome.kind === "ledger" && slot.in === "ledger") {
       extras[slot.halved ? "halvedLedger" : "ledger"] = outcome.entries;
@@ -72,5 +74,5 @@ export function gather(
     ensemble.off = ensemble.on;
     ensemble.lessRounded.off = ensemble.lessRounded.on;
   }
-  return { runs: { method, arithmetic, role, rungs, finerEarly, ensemble }, extras };
+  return { runs: { method, arithmetic, role, rungs, coarserEarly, finerEarly, ensemble }, extras };
 }

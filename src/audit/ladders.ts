@@ -144,9 +144,10 @@ function subtractedAnalysis(
  */
 const PUSH = 2 * 2 * Math.PI * EARLY_ORBITS * Number.EPSILON;
 
-/** Distances of successive early states, the finer ones included. */
+/** Distances of successive early states by rung; those coarser than the ladder have negative ones. */
 function distances(runs: MethodRuns, scenario: PreparedScenario): Difference[] {
-  const states = [...runs.rungs.map((rung) => rung.early), ...runs.finerEarly];
+  const { coarserEarly, finerEarly } = runs;
+  const states = [...coarserEarly, ...runs.rungs.map((rung) => rung.early), ...finerEarly];
   const centre = runs.rungs[runs.ensemble.rung]?.early ?? null;
   const members = runs.ensemble.early.filter((state) => state !== null);
   const spread =
@@ -154,8 +155,9 @@ function distances(runs: MethodRuns, scenario: PreparedScenario): Difference[] {
       ? 0
       : Math.max(...members.map((state) => stateDistance(scenario, state, centre)));
   const result: Difference[] = [];
-  for (let rung = 0; rung + 1 < states.length; rung++) {
-    const [coarse, fine] = [states[rung]!, states[rung + 1]!];
+  for (let k = 0; k + 1 < states.length; k++) {
+    const [coarse, fine] = [states[k]!, states[k + 1]!];
+    const rung = k - coarserEarly.length;
     if (coarse === null || fine === null) {
       result.length = 0;
       continue;

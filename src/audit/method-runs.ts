@@ -7,6 +7,8 @@ export interface MethodRuns {
   readonly arithmetic: "double" | "single";
   readonly role: "solution" | "witness";
   readonly rungs: readonly RungRuns[];
+  /** Early states of coarser steps than the ladder's, coarsest first, for the state order alone. */
+  readonly coarserEarly: readonly (readonly number[] | null)[];
   /** Early states of finer steps than the ladder's, each half the last, for the state order alone. */
   readonly finerEarly: readonly (readonly number[] | null)[];
   readonly ensemble: Ensemble;

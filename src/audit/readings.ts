@@ -1,23 +1,28 @@
 import type { QuotedUnit } from "../claim/claim.js";
-import { fitLine } from "../statistics/line.js";
-import { studentT95 } from "../statistics/student-t.js";
+import type { PreparedScenario } from "../measure/run.js";
 import type { Reading } from "./job.js";
 
+/** A passage is located to four units in the last place of the step, on either side (`measure/root.ts`). */
+const LOCATED = 4 * Number.EPSILON;
+
 /**
- * What locating the passages and fitting a line through them may add: the 95 % half-width of the slope of
- * this run's apsidal angles less those of the best run, passage by passage, so that what the orbit itself
- * does to them (a wobble, a curve) drops out.
+ * What locating the passages may add to a figure: each is off by as much of a step, times the speed at periapsis,
+ * 2π/T sqrt(1 - e²)/(1 - e)²; and of a slope over n passages the ends count most, 6/n of one of them at the
+ * worst. What a run's fit does beyond that is the same functional of its angles as of the true ones, and is part
+ * of the difference itself.
  *
- * @returns in the claim's unit; 0 where the runs share too few passages to tell
+ * @param step s, or rad
+ * @returns in the claim's unit; 0 without a figure
  */
-export function readingOff(own: Reading | null, best: Reading | null, unit: QuotedUnit): number {
-  if (own === null || best === null || own.period === null) return 0;
-  const count = Math.min(own.advances.length, best.advances.length);
-  const line = fitLine(
-    own.numbers.slice(0, count),
-    own.advances.slice(0, count).map((angle, k) => angle - best.advances[k]!),
-  );
-  if (line === null || line.slopeError === null) return 0;
-  const perOrbit = studentT95(line.degrees) * line.slopeError;
-  return (perOrbit / unit.radians) * (unit.per === "orbit" ? 1 : unit.per / own.period);
+export function readingOff(
+  reading: Reading | null,
+  { period, eccentricity: e, apsidalAngle }: PreparedScenario,
+  step: number,
+  unit: QuotedUnit,
+): number {
+  if (reading === null || reading.period === null) return 0;
+  const speed =
+    apsidalAngle === "polar" ? 1 : ((2 * Math.PI) / period) * (Math.sqrt(1 - e * e) / (1 - e) ** 2);
+  const perOrbit = (6 / reading.numbers.length) * LOCATED * step * speed;
+  return (perOrbit / unit.radians) * (unit.per === "orbit" ? 1 : unit.per / reading.period);
 }

@@ -10,7 +10,7 @@ import type { LadderPlan } from "./plan.js";
 /** Where the outcome of a task belongs. */
 export type Slot =
   | { readonly in: "rung"; readonly rung: number; readonly field: "on" | "off" | "early" }
-  | { readonly in: "finer-early"; readonly index: number }
+  | { readonly in: "coarser-early" | "finer-early"; readonly index: number }
   | { readonly in: "ensemble"; readonly member: number; readonly field: "on" | "off" | "early" }
   | { readonly in: "less-rounded"; readonly field: "on" | "off" }
   | { readonly in: "ledger"; readonly halved: boolean }
@@ -27,6 +27,14 @@ export interface PlannedTask {
 
 /** Rungs finer than the ladder's on which only the early state is computed: an orbit costs little. */
 const FINER_EARLY = 3;
+/** A method of high order may be down to rounding on all but the coarsest steps: its order shows on coarser ones. */
+const COARSER_EARLY = 2;
+const FEWEST_EARLY = 4;
+const coarserEarly = (stepsPerOrbit: number): number => {
+  let count = 0;
+  while (count < COARSER_EARLY && stepsPerOrbit / 2 ** (count + 1) >= FEWEST_EARLY) count++;
+  return count;
+};
 /** Sweeps that the stages of an implicit step take, on the average over a ladder. */
 const SWEEPS = 8;
 /** A single run may take this many times the evaluations that it is expected to. */
@@ -65,12 +73,18 @@ export function planTasks(
   const spanCost = (step: number): number => (length / step) * perStep;
   const separateNull = wanted.nullRuns && scenario.nullParameters !== null;
   const effects: readonly ("on" | "off")[] = separateNull ? ["on", "off"] : ["on"];
-  const coarse = earlySteps(ladder.steps[0]!, scenario.period);
+  const coarsest = ladder.steps[0]!;
+  const coarser = coarserEarly(scenario.period / coarsest);
+  const coarse = earlySteps(coarsest * 2 ** coarser, scenario.period);
   const tasks: PlannedTask[] = [];
   // The order of a method is that of its truncation, which single precision would drown.
   const arithmeticOf = (slot: Slot): LoopArithmetic => {
     if (slot.in === "less-rounded") return arithmetic === "single" ? "double" : "compensated";
-    return slot.in === "finer-early" || ("field" in slot && slot.field === "early") ? "double" : arithmetic;
+    return slot.in === "coarser-early" ||
+      slot.in === "finer-early" ||
+      ("field" in slot && slot.field === "early")
+      ? "double"
+      : arithmetic;
   };
   const add = (slot: Slot, task: Task, cost: number): void => {
     tasks.push({ method, arithmetic: arithmeticOf(slot), task, slot, cost });
@@ -80,7 +94,7 @@ export function planTasks(
     add(slot, { kind: "run", step, effect, evaluations: PATIENCE * cost, ...(state && { state }) }, cost);
   };
   const early = (slot: Slot, step: number, halvings: number, state?: readonly number[]): void => {
-    const steps = coarse * 2 ** halvings;
+    const steps = coarse * 2 ** (coarser + halvings);
     add(slot, { kind: "early", step, steps, ...(state && { state }) }, steps * perStep);
   };
 
@@ -90,7 +104,10 @@ export function planTasks(
   });
   for (let index = 0; index < FINER_EARLY; index++) {
     const halvings = ladder.steps.length + index;
-    early({ in: "finer-early", index }, ladder.steps[0]! / 2 ** halvings, halvings);
+    early({ in: "finer-early", index }, coarsest / 2 ** halvings, halvings);
+  }
+  for (let index = 0; index < coarser; index++) {
+    early({ in: "coarser-early", index }, coarsest * 2 ** (coarser - index), index - coarser);
   }
   const members = lastBitEnsemble(scenario.state, EPSILON[arithmetic]);
   const inDouble = lastBitEnsemble(scenario.state);

@@ -24,11 +24,14 @@ export interface Case {
   readonly text: string;
 }
 
+/** Halvings of the author's step that tell whether its figure converges. */
+const HALVINGS = 3;
 /** Perturbed runs that tell of rounding, and how many times their farthest may be exceeded. */
 const PERTURBED = 3;
 const ROUNDING_SHARE = 2;
-/** A margin finer than this part of the figure asks for more than its double holds. */
+/** Nobody quotes a margin finer than this part of the figure, or finer than this part of a radian an orbit. */
 const FINEST_MARGIN = 1e-12;
+const FINEST_ANGLE = 1e-15;
 
 /**
  * Makes a claim of what was drawn: runs the author's solution, and quotes its figure.
@@ -45,10 +48,13 @@ export async function makeCase(
   const placeholder = claimOf(draw, { text: `1 ${draw.unit}`, value: 1, halfWidth: 1 }, name);
   const prepared = prepare(placeholder.claim);
   if ("problem" in prepared) return null;
+  const { unit } = placeholder.claim.claimed;
   const truth = truthOf(placeholder.claim, prepared);
   if (truth === null) return null;
   const { runs, rounding } = await authorsRuns(draw, placeholder.claim, prepared, pool);
-  const quoted = quoteFor(draw, toDouble(truth.value), runs[0], rounding, random);
+  const perRadian = (unit.per === "orbit" ? 1 : unit.per / prepared.scenario.period) / unit.radians;
+  const finest = Math.max(FINEST_ANGLE * perRadian, FINEST_MARGIN * Math.abs(toDouble(truth.value)));
+  const quoted = quoteFor(draw, toDouble(truth.value), runs[0] ?? null, rounding, finest, random);
   const { claim, text } = claimOf(draw, quoted, name);
   return {
     draw,
@@ -98,9 +104,7 @@ async function authorsRuns(
   const members = lastBitEnsemble(scenario.state, EPSILON[arithmetic]).slice(0, PERTURBED);
   const step = authorsStep!;
   const starts = [
-    { step },
-    { step: step / 2 },
-    { step: step / 4 },
+    ...Array.from({ length: HALVINGS + 1 }, (_, k) => ({ step: step / 2 ** k })),
     ...members.map((state) => ({ step, state })),
   ];
   const tasks = starts.flatMap((start) =>
@@ -116,9 +120,10 @@ async function authorsRuns(
     if (effects.length === 1) return 0;
     return off === null ? null : on - off;
   });
-  const [at, half, quarter, ...moved] = figures;
+  const at = figures[0] ?? null;
+  const moved = figures.slice(HALVINGS + 1);
   const off = moved.map((figure) => (figure === null || at === null ? 0 : Math.abs(figure - at)));
-  return { runs: [at!, half!, quarter!], rounding: ROUNDING_SHARE * Math.max(...off) };
+  return { runs: figures.slice(0, HALVINGS + 1), rounding: ROUNDING_SHARE * Math.max(...off) };
 }
 
 function quoteFor(
@@ -126,28 +131,21 @@ function quoteFor(
   truth: number,
   figure: number | null,
   rounding: number,
+  finest: number,
   random: Random,
 ): Quote {
   // An author whose run gave nothing quotes what the equations should give.
   const value = figure ?? truth;
-  const error = Math.max(
-    Math.abs(value - truth) + rounding,
-    FINEST_MARGIN * Math.abs(value),
-    Number.MIN_VALUE ** 0.1,
-  );
+  const error = Math.max(Math.abs(value - truth) + rounding, finest);
   switch (kind) {
     case "sound":
       return quote(value, error * random.decades(5, 1000), unit);
     case "over-quoted":
-      return quote(
-        value,
-        Math.max((error / 3) * random.decades(1e-3, 0.6), FINEST_MARGIN * Math.abs(value)),
-        unit,
-      );
+      return quote(value, Math.max((error / 3) * random.decades(1e-3, 0.6), finest), unit);
     case "artefact":
       return value === 0 ? quote(0, error, unit) : quoteDigits(value, random.pick([2, 3, 4]), unit);
     case "contradicted": {
-      const margin = error * random.decades(0.1, 100);
+      const margin = Math.max(error * random.decades(0.1, 100), finest);
       const shift = (random.chance(0.5) ? 1 : -1) * (margin + error) * random.decades(2.5, 100);
       return quote(value + shift, margin, unit);
     }

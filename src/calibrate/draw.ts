@@ -56,6 +56,7 @@ export function draw(random: Random): Draw {
   // No orbit of a strong field dips into the centre.
   const most = Math.min(0.95, 1 - 20 * (relativistic ? strength : 0));
   const e = random.chance(0.1) ? random.decades(1e-3, 0.05) : random.between(0.01, most);
+  const hasEffect = relativistic || equations === "oblate";
   const orbits = Math.round(random.decades(3, 30));
 
   const applicable = methodsCatalog.filter(
@@ -78,7 +79,8 @@ export function draw(random: Random): Draw {
     isMistyped,
     stepsPerOrbit,
     arithmetic: random.chance(0.08) ? "single" : "double",
-    baseline: random.chance(0.35) ? "subtracted" : "included",
+    // Where nothing can be switched off there is nothing to subtract.
+    baseline: hasEffect && random.chance(0.4) ? "subtracted" : "included",
     unit: `${random.pick(angles)}/${random.pick(times)}`,
     scenario: {
       equations,

@@ -6,8 +6,8 @@ export interface Known {
   /** Q*, exact for all that matters here. */
   readonly truth: number;
   readonly claimed: { readonly value: number; readonly halfWidth: number };
-  /** Figures of the author's own run, and at half and a quarter of its step; null where a run gave none. */
-  readonly runs: readonly [number | null, number | null, number | null];
+  /** Figures of the author's own run, and at a half, a quarter and an eighth of its step; null where a run gave none. */
+  readonly runs: readonly (number | null)[];
   /** How far rounding moves such a figure. */
   readonly rounding: number;
   readonly isMistyped: boolean;
@@ -15,8 +15,9 @@ export interface Known {
 
 /** A margin by which a number may miss a limit before the case counts as clear. */
 const CLOSE = 1.1;
-/** Errors that fall by less than this at each halving follow no order. */
-const FALLS = 1.5;
+/** Exponents of a window agree within a quarter; half as much is certain, twice as much certainly not. */
+const AGREE = 0.125;
+const DISAGREE = 0.5;
 
 /**
  * The verdicts that are right by the rules of the verdict on the numbers as they are. More than one where a
@@ -24,9 +25,10 @@ const FALLS = 1.5;
  */
 export function rightVerdicts(known: Known): ReadonlySet<Verdict> {
   const { truth, claimed, runs, rounding, isMistyped } = known;
-  if (runs[0] === null) return new Set(["not-resolved"]);
+  const figure = runs[0] ?? null;
+  if (figure === null) return new Set(["not-resolved"]);
   const distance = Math.abs(claimed.value - truth);
-  const error = Math.abs(runs[0] - truth);
+  const error = Math.abs(figure - truth);
   const right = new Set<Verdict>();
   for (const e of [error / CLOSE, error, error * CLOSE + rounding]) {
     for (const u of [claimed.halfWidth / CLOSE, claimed.halfWidth * CLOSE]) {
@@ -39,19 +41,17 @@ export function rightVerdicts(known: Known): ReadonlySet<Verdict> {
 }
 
 /** Whether the author's step lies where the figure converges: yes, no, or hard to say. */
-function convergence({ truth, runs, rounding }: Known): readonly boolean[] {
-  const errors = runs.map((run) => (run === null ? Infinity : Math.abs(run - truth)));
-  const [at, half, quarter] = errors as [number, number, number];
-  const falls = (coarse: number, fine: number): boolean => fine <= coarse / FALLS || fine <= 3 * rounding;
-  if (falls(at, half) && falls(half, quarter))
-    return at <= 3 * rounding ? [true] : [true, ...unsteady(errors)];
-  return half > at && half > 3 * rounding ? [false] : [true, false];
-}
-
-/** Errors that fall, but not by one power of the step, may be outside of the window all the same. */
-function unsteady([at, half, quarter]: readonly number[]): readonly boolean[] {
-  const [first, second] = [Math.log2(at! / half!), Math.log2(half! / quarter!)];
-  return Math.abs(first - second) > 0.5 ? [false] : [];
+function convergence({ runs, rounding }: Known): readonly boolean[] {
+  const figures = runs.map((run) => run ?? Number.NaN);
+  const differences = figures.slice(1).map((figure, k) => figures[k]! - figure);
+  // Down to rounding there is no more to ask.
+  if (differences.every((difference) => Math.abs(difference) <= 3 * rounding)) return [true];
+  const exponents = differences.slice(1).map((difference, k) => Math.log2(differences[k]! / difference));
+  const [first, second] = exponents as [number, number];
+  const clear = differences.every((difference) => Math.abs(difference) > 10 * rounding);
+  if (!clear) return [true, false];
+  if (Math.abs(first - second) <= AGREE && second > AGREE) return [true];
+  return Math.abs(first - second) <= DISAGREE ? [true, false] : [false];
 }
 
 function verdict(
@@ -74,7 +74,8 @@ function verdict(
 
 /** A verdict of resolved for a figure that is not, with no more to spare than rounding of the last digit. */
 export function isWrongResolved({ truth, claimed, runs, isMistyped }: Known): boolean {
-  const error = runs[0] === null ? Infinity : Math.abs(runs[0] - truth);
+  const figure = runs[0] ?? null;
+  const error = figure === null ? Infinity : Math.abs(figure - truth);
   const slack = 1 + 1e-9;
   return (
     isMistyped ||
@@ -85,8 +86,9 @@ export function isWrongResolved({ truth, claimed, runs, isMistyped }: Known): bo
 
 /** Digits that stand, for the error as it is and as rounding may have made it. */
 export function rightDigits({ truth, claimed, runs, rounding }: Known): readonly number[] {
-  if (runs[0] === null) return [];
-  const error = Math.abs(runs[0] - truth);
+  const figure = runs[0] ?? null;
+  if (figure === null) return [];
+  const error = Math.abs(figure - truth);
   const distance = Math.abs(claimed.value - truth);
   return [error, error + rounding].flatMap((e) => standingDigits(truth, e, distance) ?? []);
 }

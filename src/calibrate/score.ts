@@ -24,7 +24,7 @@ export function score(name: string, given: Case, result: ClaimResult): Scored {
   const right = rightVerdicts(known);
   const { best, asSolved, verdict, digits } = result;
   const off = best.value === null ? null : Math.abs(best.value - known.truth);
-  const trueError = known.runs[0] === null ? null : known.runs[0] - known.truth;
+  const trueError = figureOf(known) === null ? null : figureOf(known)! - known.truth;
   const possible = rightDigits(known);
   return {
     name,
@@ -44,6 +44,8 @@ export function score(name: string, given: Case, result: ClaimResult): Scored {
         : digits >= Math.min(...possible) - 1 && digits <= Math.max(...possible) + 1,
   };
 }
+
+const figureOf = ({ runs }: Case["known"]): number | null => runs[0] ?? null;
 
 /** What the truth, written as a double, leaves open. */
 const slack = (value: number, halfWidth: number): number => halfWidth + Number.EPSILON * Math.abs(value);
@@ -100,13 +102,13 @@ export function summarise(seed: number, scored: readonly Scored[], seconds: numb
     error: {
       ...coverage(
         scored.flatMap(({ result: { asSolved }, case: { known, truthHalfWidth } }) =>
-          asSolved.error === null || known.runs[0] === null
+          asSolved.error === null || figureOf(known) === null
             ? []
             : [
                 {
                   value: asSolved.error,
                   halfWidth: asSolved.halfWidth!,
-                  known: { truth: known.runs[0] - known.truth },
+                  known: { truth: figureOf(known)! - known.truth },
                   truthHalfWidth,
                 },
               ],

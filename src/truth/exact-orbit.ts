@@ -24,7 +24,7 @@ type State = readonly DoubleDouble[];
  * newtonian and newtonian-angle, schwarzschild-angle, post-newtonian-1, and oblate in the plane of its equator.
  *
  * @param parameters by claim name
- * @param state in the order of the equations: x, y and their rates, or u and u'
+ * @param state in the order of the equations: x, y, where given z, and their rates; or u and u'
  * @returns null for any other equations or start
  */
 export function exactOrbit(equations: string, parameters: Parameters, state: State): ExactOrbit | null {
@@ -39,7 +39,8 @@ export function exactOrbit(equations: string, parameters: Parameters, state: Sta
     }
     case "oblate": {
       const planar = periapsisOf(state);
-      if (planar === null || (parameters.J3 ?? ZERO).high !== 0) return null;
+      const pulledOut = (parameters.J3 ?? ZERO).high !== 0 || !inEquator(state);
+      if (planar === null || pulledOut) return null;
       return integrateOrbit(central(planar, equatorial(parameters)));
     }
     case "post-newtonian-1": {
@@ -56,15 +57,22 @@ interface Periapsis {
   readonly h: DoubleDouble;
 }
 
-/** u and h of a planar start with the velocity across the radius. */
+/** u and h of a start, in a plane or in space, with the velocity exactly across the radius. */
 function periapsisOf(state: State): Periapsis | null {
-  if (state.length !== 4) return null;
-  const [x, y, vx, vy] = state as [DoubleDouble, DoubleDouble, DoubleDouble, DoubleDouble];
-  const radial = add(multiply(x, vx), multiply(y, vy));
+  const half = state.length / 2;
+  const [place, velocity] = [state.slice(0, half), state.slice(half)];
+  const radial = dot(place, velocity);
   if (radial.high !== 0) return null;
-  const u = divide(ONE, sqrt(add(multiply(x, x), multiply(y, y))));
-  return { u, h: subtract(multiply(x, vy), multiply(y, vx)) };
+  const radius = sqrt(dot(place, place));
+  // The angle counts along the motion, whichever way it goes.
+  return { u: divide(ONE, radius), h: multiply(radius, sqrt(dot(velocity, velocity))) };
 }
+
+const dot = (x: State, y: State): DoubleDouble =>
+  x.reduce((sum, value, i) => add(sum, multiply(value, y[i]!)), ZERO);
+
+const inEquator = (state: State): boolean =>
+  state.length === 4 || (state[2]!.high === 0 && state[5]!.high === 0);
 
 /** GM u + ... of the negative potential of an oblate body in its equator: coefficients of u, u³, u⁵. */
 function equatorial({ GM, R, J2, J4 }: Parameters): DoubleDouble[] {
