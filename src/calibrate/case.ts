@@ -51,7 +51,7 @@ export async function makeCase(
   const { unit } = placeholder.claim.claimed;
   const truth = truthOf(placeholder.claim, prepared);
   if (truth === null) return null;
-  const { runs, rounding } = await authorsRuns(draw, placeholder.claim, prepared, pool);
+  const { runs, ladders, rounding } = await authorsRuns(draw, placeholder.claim, prepared, pool);
   const perRadian = (unit.per === "orbit" ? 1 : unit.per / prepared.scenario.period) / unit.radians;
   const finest = Math.max(FINEST_ANGLE * perRadian, FINEST_MARGIN * Math.abs(toDouble(truth.value)));
   const quoted = quoteFor(draw, toDouble(truth.value), runs[0] ?? null, rounding, finest, random);
@@ -65,6 +65,7 @@ export async function makeCase(
       truth: toDouble(truth.value),
       claimed: { value: claim.claimed.value, halfWidth: claim.claimed.halfWidth },
       runs,
+      ladders,
       rounding,
       isMistyped: draw.isMistyped,
     },
@@ -95,7 +96,7 @@ async function authorsRuns(
   { claimed: { unit } }: Claim,
   { recipe, scenario, authorsStep }: Prepared,
   pool: JobPool,
-): Promise<Pick<Known, "runs" | "rounding">> {
+): Promise<Pick<Known, "runs" | "ladders" | "rounding">> {
   const effects =
     baseline === "subtracted" && scenario.nullParameters !== null
       ? (["on", "off"] as const)
@@ -113,17 +114,23 @@ async function authorsRuns(
   const outcomes = await pool.run({ system: recipe, method, arithmetic, scenario, tasks });
   const read = (outcome: Outcome): number | null =>
     outcome.kind === "run" ? figureOf(outcome.reading, unit) : null;
-  const figures = starts.map((_, i) => {
-    const [on = null, off = null] = outcomes.slice(i * effects.length, (i + 1) * effects.length).map(read);
-    if (on === null || baseline === "included") return on;
-    // Where nothing can vanish the run is its own null run.
-    if (effects.length === 1) return 0;
-    return off === null ? null : on - off;
+  const ofEffect = (effect: number): (number | null)[] =>
+    starts.map((_, i) => read(outcomes[i * effects.length + effect]!));
+  const [on, off] = effects.map((_, effect) => ofEffect(effect)) as [(number | null)[], (number | null)[]?];
+  const figures = on.map((value, i) => {
+    if (off === undefined) return value;
+    const base = off[i] ?? null;
+    return value === null || base === null ? null : value - base;
   });
   const at = figures[0] ?? null;
   const moved = figures.slice(HALVINGS + 1);
-  const off = moved.map((figure) => (figure === null || at === null ? 0 : Math.abs(figure - at)));
-  return { runs: figures.slice(0, HALVINGS + 1), rounding: ROUNDING_SHARE * Math.max(...off) };
+  const distances = moved.map((figure) => (figure === null || at === null ? 0 : Math.abs(figure - at)));
+  const ladder = (values: readonly (number | null)[]) => values.slice(0, HALVINGS + 1);
+  return {
+    runs: ladder(figures),
+    ladders: [on, off].flatMap((values) => (values === undefined ? [] : [ladder(values)])),
+    rounding: ROUNDING_SHARE * Math.max(...distances),
+  };
 }
 
 function quoteFor(

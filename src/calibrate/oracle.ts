@@ -8,6 +8,8 @@ export interface Known {
   readonly claimed: { readonly value: number; readonly halfWidth: number };
   /** Figures of the author's own run, and at a half, a quarter and an eighth of its step; null where a run gave none. */
   readonly runs: readonly (number | null)[];
+  /** The same of the run and, where it is subtracted, of its null run, each by itself. */
+  readonly ladders: readonly (readonly (number | null)[])[];
   /** How far rounding moves such a figure. */
   readonly rounding: number;
   readonly isMistyped: boolean;
@@ -15,9 +17,8 @@ export interface Known {
 
 /** A margin by which a number may miss a limit before the case counts as clear. */
 const CLOSE = 1.1;
-/** Exponents of a window agree within a quarter; half as much is certain, twice as much certainly not. */
+/** Exponents of a window agree within a quarter: half as much is certain. */
 const AGREE = 0.125;
-const DISAGREE = 0.5;
 
 /**
  * The verdicts that are right by the rules of the verdict on the numbers as they are. More than one where a
@@ -40,18 +41,30 @@ export function rightVerdicts(known: Known): ReadonlySet<Verdict> {
   return right;
 }
 
-/** Whether the author's step lies where the figure converges: yes, no, or hard to say. */
-function convergence({ runs, rounding }: Known): readonly boolean[] {
-  const figures = runs.map((run) => run ?? Number.NaN);
+/**
+ * Whether the author's step lies where the figure converges: yes, no, or hard to say. A difference of two runs is
+ * seldom monotone; it converges where both do.
+ */
+function convergence({ ladders, rounding }: Known): readonly boolean[] {
+  const each = ladders.map((figures) => converges(figures, rounding));
+  if (each.some((answers) => !answers.includes(true))) return [false];
+  return each.every((answers) => answers.length === 1) ? [true] : [true, false];
+}
+
+function converges(given: readonly (number | null)[], rounding: number): readonly boolean[] {
+  const figures = given.map((figure) => figure ?? Number.NaN);
   const differences = figures.slice(1).map((figure, k) => figures[k]! - figure);
   // Down to rounding there is no more to ask.
   if (differences.every((difference) => Math.abs(difference) <= 3 * rounding)) return [true];
-  const exponents = differences.slice(1).map((difference, k) => Math.log2(differences[k]! / difference));
-  const [first, second] = exponents as [number, number];
-  const clear = differences.every((difference) => Math.abs(difference) > 10 * rounding);
-  if (!clear) return [true, false];
+  if (!differences.every((difference) => Math.abs(difference) > 10 * rounding)) return [true, false];
+  const [first, second] = differences.slice(1).map((fine, k) => Math.log2(differences[k]! / fine)) as [
+    number,
+    number,
+  ];
   if (Math.abs(first - second) <= AGREE && second > AGREE) return [true];
-  return Math.abs(first - second) <= DISAGREE ? [true, false] : [false];
+  // Every order there is halves a difference at least.
+  const sinks = differences.slice(1).every((fine, k) => Math.abs(fine) <= Math.abs(differences[k]!) / 2);
+  return sinks ? [true, false] : [false];
 }
 
 function verdict(
