@@ -1,16 +1,17 @@
 import Fraction from "fraction.js";
 import {
-  add,
   type DoubleDouble,
   fromFraction,
-  multiply,
   scale,
+  subtract,
   toDouble,
+  ZERO,
 } from "../arithmetic/double-double.js";
 import { writeMidpoint } from "../kernel/modified-midpoint.js";
 import { compilePrecise, type PreciseFunction } from "../kernel/precise-loop.js";
 import type { CompiledSystem } from "../kernel/system.js";
 import { radialMotion, scales } from "./rates.js";
+import { SeriesTable } from "./series.js";
 import type { PreciseState, Stepper, StepperOptions } from "./stepper.js";
 
 /** Rows of the extrapolation tableau for a digit of tolerance: order 2 k for 10^-(1.5 k). */
@@ -64,8 +65,16 @@ export function extrapolationStepper(system: CompiledSystem, options: StepperOpt
     { length: Math.min(MOST_ROWS, Math.max(FEWEST_ROWS, count)) },
     (_, i) => 2 * (i + 1),
   );
-  const all = weights(rows);
-  const withoutFirst = weights(rows.slice(1));
+  const last = rows.length - 1;
+  // The results of the rows, one state a slot, and the weights: of all rows, and what they change from those of
+  // all but the first.
+  const [WEIGHTS, CHANGES] = [n, n + 1];
+  const table = new SeriesTable(n + 2, last);
+  const withoutFirst = [ZERO, ...weights(rows.slice(1))];
+  weights(rows).forEach((weight, row) => {
+    table.set(WEIGHTS, row, weight);
+    table.set(CHANGES, row, subtract(weight, withoutFirst[row]!));
+  });
   const motion = radialMotion(system, parameters);
   const io = new Float64Array(2 * n);
   let before = options.state;
@@ -80,25 +89,21 @@ export function extrapolationStepper(system: CompiledSystem, options: StepperOpt
     from: PreciseState,
     length: DoubleDouble,
   ): { readonly to: PreciseState; readonly error: number } => {
-    const results = rows.map((steps) => {
+    rows.forEach((steps, row) => {
       for (let i = 0; i < n; i++) {
         io[i] = from[i]!.high;
         io[n + i] = from[i]!.low;
       }
       midpoint.run(io, parameters, scaledDown(length, steps), steps);
       evaluations += steps;
-      return Array.from({ length: n }, (_, i): DoubleDouble => ({ high: io[i]!, low: io[n + i]! }));
+      // Rows run backwards, as the second factor of a product of series does.
+      for (let i = 0; i < n; i++) table.set(i, last - row, { high: io[i]!, low: io[n + i]! });
     });
-    const combine = (factors: readonly DoubleDouble[], first: number, i: number): DoubleDouble =>
-      factors
-        .map((factor, k) => multiply(factor, results[first + k]![i]!))
-        .reduce((sum, term) => add(sum, term));
-    const to = from.map((_, i) => combine(all, 0, i));
+    const to = from.map((_, i) => table.weighted(WEIGHTS, i, last, 0, last, 1, 0));
     const [position, velocity] = scales(system, to);
     let error = 0;
     for (let i = 0; i < n; i++) {
-      const other = combine(withoutFirst, 1, i);
-      const off = Math.abs(to[i]!.high - other.high + (to[i]!.low - other.low));
+      const off = Math.abs(table.weighted(CHANGES, i, last, 0, last, 1, 0).high);
       error = Math.max(error, off / (i < half ? position : velocity));
     }
     return { to, error };

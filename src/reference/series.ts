@@ -114,6 +114,34 @@ export class SeriesTable {
     return { high: this.#result[0]!, low: this.#result[1]! };
   }
 
+  /** own_(k+1) = a_k b_(k+1), with reciprocals in b: the coefficient of an integral. */
+  integrate(own: number, k: number, a: number, b: number): void {
+    this.#product(a, b, 2 * k + 1, k, k);
+    this.#put(own * this.#stride + k + 1, this.#result[0]!, this.#result[1]!);
+  }
+
+  /** The sum of a series at x, by Horner's scheme. */
+  evaluate(slot: number, { high: x, low: xLow }: DoubleDouble): DoubleDouble {
+    const shiftedX = CUT * x;
+    const x1 = shiftedX - (shiftedX - x);
+    const x2 = x - x1;
+    const first = slot * this.#stride;
+    let high = 0;
+    let low = 0;
+    for (let i = first + this.#stride - 1; i >= first; i--) {
+      const p = high * x;
+      const shifted = CUT * high;
+      const h1 = shifted - (shifted - high);
+      const h2 = high - h1;
+      const e = h1 * x1 - p + h1 * x2 + h2 * x1 + h2 * x2 + (high * xLow + low * x);
+      const product = p + e;
+      this.#add(product, e - (product - p), this.#high[i]!, this.#low[i]!);
+      high = this.#result[0]!;
+      low = this.#result[1]!;
+    }
+    return { high, low };
+  }
+
   /** a_k less a sum of products. */
   #rest(a: number, k: number, x: number, y: number, first: number, last: number): void {
     const i = a * this.#stride + k;

@@ -1,12 +1,4 @@
-import {
-  add,
-  type DoubleDouble,
-  divide,
-  fromDouble,
-  multiply,
-  shift,
-  toDouble,
-} from "../arithmetic/double-double.js";
+import { type DoubleDouble, divide, fromDouble, ONE, shift, toDouble } from "../arithmetic/double-double.js";
 import type { CompiledSystem } from "../kernel/system.js";
 import { radialMotion, scales } from "./rates.js";
 import { SeriesTable } from "./series.js";
@@ -39,7 +31,9 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
   const { parameters, tolerance } = options;
   const program = programOf(system);
   const order = orderFor(tolerance);
-  const table = new SeriesTable(program.slots, order);
+  const reciprocals = program.slots;
+  const table = new SeriesTable(program.slots + 1, order);
+  const inverses = Array.from({ length: order }, (_, k) => divide(ONE, fromDouble(k + 1)));
   const n = system.states.length;
   const half = n / 2;
   const motion = radialMotion(system, parameters);
@@ -56,17 +50,19 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
 
   const expand = (from: PreciseState): void => {
     unit = powerOfTwoNear(last);
+    // In units of `unit`, a power of two: x_(k+1) = unit v_k / (k + 1).
+    inverses.forEach((inverse, k) => {
+      table.set(reciprocals, k + 1, shift(inverse, unit));
+    });
     from.forEach((value, i) => {
       table.set(program.states[i]!, 0, value);
     });
     for (let k = 0; k < order; k++) {
       for (const next of program.recurrences) next(table, k);
-      // In units of `unit`, a power of two: x_(k+1) = unit v_k / (k + 1).
-      const over = fromDouble((k + 1) / unit);
       for (let i = 0; i < half; i++) {
         const [q, v] = [program.states[i]!, program.states[half + i]!];
-        table.set(q, k + 1, divide(table.get(v, k), over));
-        table.set(v, k + 1, divide(table.get(program.accelerations[i]!, k), over));
+        table.integrate(q, k, v, reciprocals);
+        table.integrate(v, k, program.accelerations[i]!, reciprocals);
       }
     }
     evaluations += perStep;
@@ -78,11 +74,7 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
   };
   const at = (length: DoubleDouble): PreciseState => {
     const part = shift(length, 1 / unit);
-    return program.states.map((slot) => {
-      let sum = table.get(slot, order);
-      for (let k = order - 1; k >= 0; k--) sum = add(multiply(sum, part), table.get(slot, k));
-      return sum;
-    });
+    return program.states.map((slot) => table.evaluate(slot, part));
   };
 
   return {
