@@ -3,8 +3,7 @@ import type { ClaimResult, PassageSeries } from "../result/result.js";
 import { judge } from "../verdict/judge.js";
 import { bestOf, intervalOf, referenceOf } from "./best.js";
 import { evidenceOf } from "./evidence.js";
-import type { ExecuteOptions } from "./execute.js";
-import { type Investigation, investigate } from "./investigate.js";
+import { type AuditOptions, type Investigation, investigate } from "./investigate.js";
 import type { Reading } from "./job.js";
 import { ladderResult } from "./ladder-result.js";
 import { ledgerOf } from "./ledger.js";
@@ -16,7 +15,7 @@ import { claimedOf, undetermined } from "./undetermined.js";
 
 /** Audits claims on a pool of workers. */
 export interface Auditor {
-  audit(claim: Claim, options?: ExecuteOptions): Promise<ClaimResult>;
+  audit(claim: Claim, options?: AuditOptions): Promise<ClaimResult>;
   close(): Promise<void>;
 }
 
@@ -30,7 +29,7 @@ export async function createAuditor({ workers }: { readonly workers: number }): 
 }
 
 /** Audits one claim on a pool. */
-export async function auditClaim(claim: Claim, pool: JobPool, options: ExecuteOptions): Promise<ClaimResult> {
+export async function auditClaim(claim: Claim, pool: JobPool, options: AuditOptions): Promise<ClaimResult> {
   const began = performance.now();
   const prepared = prepare(claim);
   if ("problem" in prepared) return undetermined(claim.file, prepared.problem, claim, claim);

@@ -44,7 +44,9 @@ export async function calibrate(options: CalibrateOptions): Promise<Calibration>
     for (let attempt = 0; attempt < MOST_DRAWS; attempt++) {
       const made = await makeCase(draw(random), random, pool, name);
       if (made === null) continue;
-      const result = await auditClaim(made.claim, pool, stop === undefined ? {} : { signal: stop });
+      const { withoutReference } = made.draw;
+      const asked = stop === undefined ? { withoutReference } : { withoutReference, signal: stop };
+      const result = await auditClaim(made.claim, pool, asked);
       return score(name, made, result);
     }
     throw new Error(`no claim can be made of seed ${from}, number ${number}`);

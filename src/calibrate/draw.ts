@@ -24,6 +24,8 @@ export interface Draw {
   readonly arithmetic: "double" | "single";
   readonly baseline: "included" | "subtracted";
   readonly unit: string;
+  /** Audited on the ladders alone, as where a reference would be too dear. */
+  readonly withoutReference: boolean;
 }
 
 /** Evaluations that the ladders of one audit may take, as a rule and now and then. */
@@ -79,6 +81,7 @@ export function draw(random: Random): Draw {
     isMistyped,
     stepsPerOrbit,
     arithmetic: random.chance(0.08) ? "single" : "double",
+    withoutReference: random.chance(0.2),
     // Where nothing can be switched off there is nothing to subtract.
     baseline: hasEffect && random.chance(0.4) ? "subtracted" : "included",
     unit: `${random.pick(angles)}/${random.pick(times)}`,
