@@ -128,14 +128,22 @@ function subtractedAnalysis(
       ? null
       : { value: raw.limit.value - off.limit.value, halfWidth: raw.limit.halfWidth + off.limit.halfWidth };
   const limit = direct === null || (apart !== null && apart.halfWidth < direct.halfWidth) ? apart : direct;
-  if (difference.shape === "asymptotic") return { ...difference, limit };
-  const window: readonly [number, number] | null =
-    raw.window === null || off.window === null
-      ? null
-      : [Math.max(raw.window[0], off.window[0]), Math.min(raw.window[1], off.window[1])];
-  // Two coarse windows that do not overlap leave no rung where both laws hold.
-  if (window === null || window[0] > window[1]) return { ...difference, limit };
+  const window = sharedWindow(raw, off);
+  if (difference.shape === "asymptotic" && difference.window !== null) {
+    // Coarser than its own law holds the difference still converges where both runs do.
+    const [from, to] = difference.window;
+    return { ...difference, window: [Math.min(from, window?.[0] ?? from), to], limit };
+  }
+  if (window === null) return { ...difference, limit };
   return { shape: raw.shape, order: raw.order, orderInterval: raw.orderInterval, window, limit };
+}
+
+/** The rungs on which two ladders both converge; two coarse windows that do not overlap leave none. */
+function sharedWindow(one: LadderAnalysis, other: LadderAnalysis): readonly [number, number] | null {
+  if (one.window === null || other.window === null) return null;
+  const from = Math.max(one.window[0], other.window[0]);
+  const to = Math.min(one.window[1], other.window[1]);
+  return from > to ? null : [from, to];
 }
 
 /**

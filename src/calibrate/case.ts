@@ -29,6 +29,8 @@ const HALVINGS = 3;
 /** Perturbed runs that tell of rounding, and how many times their farthest may be exceeded. */
 const PERTURBED = 3;
 const ROUNDING_SHARE = 2;
+/** Tens of roundings of a double, rad an orbit over the eccentricity. */
+const DOUBLES_LEAVE = 3e-14;
 /** Nobody quotes a margin finer than this part of the figure, or finer than this part of a radian an orbit. */
 const FINEST_MARGIN = 1e-12;
 const FINEST_ANGLE = 1e-15;
@@ -68,6 +70,7 @@ export async function makeCase(
       ladders,
       rounding,
       isMistyped: draw.isMistyped,
+      leftOpen: draw.withoutReference ? (DOUBLES_LEAVE / prepared.scenario.eccentricity) * perRadian : 0,
     },
   };
 }
@@ -122,14 +125,19 @@ async function authorsRuns(
     const base = off[i] ?? null;
     return value === null || base === null ? null : value - base;
   });
-  const at = figures[0] ?? null;
-  const moved = figures.slice(HALVINGS + 1);
-  const distances = moved.map((figure) => (figure === null || at === null ? 0 : Math.abs(figure - at)));
+  const moved = (values: readonly (number | null)[]): number => {
+    const [at = null] = values;
+    const perturbed = values.slice(HALVINGS + 1);
+    const distances = perturbed.map((value) => (value === null || at === null ? 0 : Math.abs(value - at)));
+    return ROUNDING_SHARE * Math.max(...distances);
+  };
   const ladder = (values: readonly (number | null)[]) => values.slice(0, HALVINGS + 1);
   return {
     runs: ladder(figures),
-    ladders: [on, off].flatMap((values) => (values === undefined ? [] : [ladder(values)])),
-    rounding: ROUNDING_SHARE * Math.max(...distances),
+    ladders: [on, off].flatMap((values) =>
+      values === undefined ? [] : [{ figures: ladder(values), rounding: moved(values) }],
+    ),
+    rounding: moved(figures),
   };
 }
 

@@ -9,10 +9,12 @@ export interface Known {
   /** Figures of the author's own run, and at a half, a quarter and an eighth of its step; null where a run gave none. */
   readonly runs: readonly (number | null)[];
   /** The same of the run and, where it is subtracted, of its null run, each by itself. */
-  readonly ladders: readonly (readonly (number | null)[])[];
+  readonly ladders: readonly { readonly figures: readonly (number | null)[]; readonly rounding: number }[];
   /** How far rounding moves such a figure. */
   readonly rounding: number;
   readonly isMistyped: boolean;
+  /** What doubles leave open, where there is no reference to see below it; else 0. */
+  readonly leftOpen: number;
 }
 
 /** A margin by which a number may miss a limit before the case counts as clear. */
@@ -31,6 +33,7 @@ export function rightVerdicts(known: Known): ReadonlySet<Verdict> {
   const distance = Math.abs(claimed.value - truth);
   const error = Math.abs(figure - truth);
   const right = new Set<Verdict>();
+  if (claimed.halfWidth / 3 < known.leftOpen) right.add("undetermined");
   for (const e of [error / CLOSE, error, error * CLOSE + rounding]) {
     for (const u of [claimed.halfWidth / CLOSE, claimed.halfWidth * CLOSE]) {
       for (const trusted of isMistyped ? [false] : convergence(known)) {
@@ -45,8 +48,8 @@ export function rightVerdicts(known: Known): ReadonlySet<Verdict> {
  * Whether the author's step lies where the figure converges: yes, no, or hard to say. A difference of two runs is
  * seldom monotone; it converges where both do.
  */
-function convergence({ ladders, rounding }: Known): readonly boolean[] {
-  const each = ladders.map((figures) => converges(figures, rounding));
+function convergence({ ladders }: Known): readonly boolean[] {
+  const each = ladders.map(({ figures, rounding }) => converges(figures, rounding));
   if (each.some((answers) => !answers.includes(true))) return [false];
   return each.every((answers) => answers.length === 1) ? [true] : [true, false];
 }
