@@ -8,6 +8,7 @@ import { type Extras, gather } from "./gather.js";
 import { type AnalysedLadder, analyse } from "./ladders.js";
 import { type LadderPlan, planLadder, rungsWorthRunning } from "./plan.js";
 import type { JobPool } from "./pool.js";
+import { withPreciseOrder } from "./precise-order.js";
 import type { Prepared } from "./prepare.js";
 import { findReference, type NoReference, type Reference } from "./reference.js";
 import { costPerStep, planTasks } from "./tasks.js";
@@ -101,7 +102,14 @@ export async function investigate(
       outcomes,
     ),
   );
-  const ladders = gathered.map(({ runs }) => analyse(runs, scenario, unit, subtracted));
+  const analysed = gathered.map(({ runs }) => analyse(runs, scenario, unit, subtracted));
+  const ladders = await Promise.all(
+    analysed.map((ladder) =>
+      ladder.runs.role === "witness"
+        ? ladder
+        : withPreciseOrder(ladder, recipe, scenario, pool, options.signal),
+    ),
+  );
   const estimates = ladders
     .filter(({ runs }) => runs.role === "witness")
     .flatMap(({ runs, analysis }) =>

@@ -26,6 +26,17 @@ export interface ReferenceJob {
   readonly evaluations: number;
 }
 
+/** Early states of a method on a ladder of halved steps, in double-double. */
+export interface EarlyDistancesJob {
+  readonly kind: "early-distances";
+  readonly system: SystemRecipe;
+  readonly method: MethodDefinition;
+  readonly scenario: PreparedScenario;
+  /** The coarsest. */
+  readonly step: number;
+  readonly rungs: number;
+}
+
 /** Work on one method, done by one worker in one go. */
 export interface Job {
   readonly system: SystemRecipe;
@@ -74,4 +85,10 @@ export type Outcome =
   | { readonly kind: "second-reading"; readonly perOrbit: number | null; readonly halfWidth: number | null };
 
 /** What a job gives. */
-export type Done<J> = J extends ReferenceJob ? PreciseOrbit : Outcome[];
+export type Done<J> = J extends ReferenceJob
+  ? PreciseOrbit
+  : J extends EarlyDistancesJob
+    ? number[]
+    : Outcome[];
+
+export type AnyJob = Job | ReferenceJob | EarlyDistancesJob;

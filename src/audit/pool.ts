@@ -1,10 +1,10 @@
 import { existsSync } from "node:fs";
 import { fileURLToPath } from "node:url";
-import type { Done, Job, ReferenceJob } from "./job.js";
+import type { AnyJob, Done } from "./job.js";
 
 /** Where jobs are done. */
 export interface JobPool {
-  run<J extends Job | ReferenceJob>(job: J, signal?: AbortSignal): Promise<Done<J>>;
+  run<J extends AnyJob>(job: J, signal?: AbortSignal): Promise<Done<J>>;
   close(): Promise<void>;
 }
 

@@ -11,8 +11,9 @@ import { runLimits } from "../measure/limits.js";
 import { runPassages } from "../measure/passages.js";
 import type { PreparedScenario, Run } from "../measure/run.js";
 import type { MethodDefinition } from "../methods/definition.js";
+import { earlyDistances } from "../reference/early-distances.js";
 import { type PreciseOrbit, preciseOrbit } from "../reference/orbit.js";
-import type { Done, Job, Outcome, Reading, ReferenceJob, SystemRecipe, Task } from "./job.js";
+import type { AnyJob, Done, Job, Outcome, Reading, ReferenceJob, SystemRecipe, Task } from "./job.js";
 
 interface Built {
   readonly system: CompiledSystem;
@@ -53,8 +54,11 @@ export function loopOf(
 }
 
 /** Does the tasks of a job in order. Pure but for the time it takes: the same job gives the same figures. */
-export default function runJob<J extends Job | ReferenceJob>(job: J): Done<J>;
-export default function runJob(job: Job | ReferenceJob): Outcome[] | PreciseOrbit {
+export default function runJob<J extends AnyJob>(job: J): Done<J>;
+export default function runJob(job: AnyJob): Outcome[] | PreciseOrbit | number[] {
+  if ("kind" in job) {
+    return earlyDistances(systemOf(job.system).system, job.method, job.scenario, job.step, job.rungs);
+  }
   if ("effect" in job) return follow(job);
   const loop = loopOf(job.system, job.method, job.arithmetic);
   return job.tasks.map((task) => runTask(job, loop, task));
