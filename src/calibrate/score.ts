@@ -77,11 +77,11 @@ export function summarise(seed: number, scored: readonly Scored[], seconds: numb
       ),
     );
   const ladders = scored.flatMap(({ result, case: { known, truthHalfWidth } }) =>
-    result.ladders.flatMap(({ extrapolated, shape, role }) =>
+    result.ladders.flatMap(({ extrapolated, shape, role, floor }) =>
       // The limit of a mistyped method is none of the equations'.
       extrapolated === null || (role === "solution" && known.isMistyped)
         ? []
-        : [{ ...extrapolated, shape, known, truthHalfWidth }],
+        : [{ ...extrapolated, shape, known, truthHalfWidth, floor }],
     ),
   );
   return {
@@ -89,6 +89,7 @@ export function summarise(seed: number, scored: readonly Scored[], seconds: numb
     claims: scored.length,
     wrongResolved: scored.filter((one) => one.isWrongResolved).length,
     verdicts: share(scored.map((one) => one.verdictIsRight)),
+    clearVerdicts: share(scored.filter(({ right }) => right.length === 1).map((one) => one.verdictIsRight)),
     best: { reference: bestFrom("reference"), extrapolation: bestFrom("extrapolation") },
     fromLadders: coverage(
       scored.flatMap(({ result: { best }, case: { known, truthHalfWidth } }) =>
@@ -127,6 +128,7 @@ interface Interval {
   readonly halfWidth: number;
   readonly known: { readonly truth: number };
   readonly truthHalfWidth: number;
+  readonly floor?: number | null;
 }
 
 function coverage(intervals: readonly Interval[]): Coverage {
@@ -134,10 +136,18 @@ function coverage(intervals: readonly Interval[]): Coverage {
   const open = intervals.map(({ known: { truth }, truthHalfWidth }) => slack(truth, truthHalfWidth));
   const held = intervals.filter(({ halfWidth }, i) => errors[i]! <= halfWidth + open[i]!).length;
   // An error that the truth's own half-width may have made says nothing of tightness.
-  const ratios = intervals.flatMap(({ halfWidth }, i) =>
-    errors[i]! > 10 * open[i]! ? [halfWidth / errors[i]!] : [],
-  );
-  return { of: intervals.length, held, tightness: ratios.length === 0 ? null : median(ratios) };
+  const tightness = (above: (interval: Interval, i: number) => number): number | null => {
+    const ratios = intervals.flatMap((interval, i) =>
+      errors[i]! > above(interval, i) ? [interval.halfWidth / errors[i]!] : [],
+    );
+    return ratios.length === 0 ? null : median(ratios);
+  };
+  return {
+    of: intervals.length,
+    held,
+    tightness: tightness((_, i) => 10 * open[i]!),
+    tightnessAboveRounding: tightness(({ floor }, i) => Math.max(10 * open[i]!, floor ?? Infinity)),
+  };
 }
 
 function missOf(one: Scored): Miss[] {

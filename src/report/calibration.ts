@@ -9,6 +9,7 @@ export function calibrationText(calibration: Calibration): string {
     "",
     `resolved for a figure that is not      ${calibration.wrongResolved}`,
     `verdicts right                         ${share(calibration.verdicts)}`,
+    `  where the rules leave but one       ${share(calibration.clearVerdicts)}`,
     `digits right, give or take one         ${share(calibration.digits)}`,
     "",
     "half-widths, 95 %                      reach truth              by its error, median",
@@ -35,7 +36,9 @@ const percent = ({ held, of }: Share): string => (of === 0 ? "-" : `${((100 * he
 const share = (given: Share): string => `${percent(given).padStart(8)}   ${given.held} of ${given.of}`;
 
 function covered(what: string, given: Coverage): string {
-  const ratio = given.tightness === null ? "" : `${size(given.tightness)} times`;
+  const times = (ratio: number | null): string => (ratio === null ? "" : size(ratio));
+  const above = given.tightnessAboveRounding;
+  const ratio = times(given.tightness) + (above === null ? "" : `, above rounding ${times(above)}`);
   return `${what.padEnd(39)}${share(given).padEnd(25)}${ratio}`.trimEnd();
 }
 

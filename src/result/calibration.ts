@@ -10,6 +10,8 @@ export interface Share {
 export interface Coverage extends Share {
   /** Median of half-width by true error, of those with an error above what a double shows. */
   readonly tightness: number | null;
+  /** The same of those with an error above rounding, which a ladder cannot see below; null where none is known. */
+  readonly tightnessAboveRounding: number | null;
 }
 
 export interface Calibration {
@@ -17,6 +19,8 @@ export interface Calibration {
   readonly claims: number;
   readonly wrongResolved: number;
   readonly verdicts: Share;
+  /** Of those claims on which the rules leave but one verdict. */
+  readonly clearVerdicts: Share;
   readonly best: { readonly reference: Coverage; readonly extrapolation: Coverage };
   /** Of the witnesses' ladders alone, whether or not there was a reference beside them. */
   readonly fromLadders: Coverage;
