@@ -17,8 +17,8 @@ export interface Known {
   readonly leftOpen: number;
 }
 
-/** A margin by which a number may miss a limit before the case counts as clear. */
-const CLOSE = 1.1;
+/** How many times what a few perturbed runs show of rounding an audit may take it to be. */
+const CLOSE = 2;
 /** Exponents of a window agree within a quarter: half as much is certain. */
 const AGREE = 0.125;
 
@@ -34,10 +34,12 @@ export function rightVerdicts(known: Known): ReadonlySet<Verdict> {
   const error = Math.abs(figure - truth);
   const right = new Set<Verdict>();
   if (claimed.halfWidth / 3 < known.leftOpen) right.add("undetermined");
-  for (const e of [error / CLOSE, error, error * CLOSE + rounding]) {
-    for (const u of [claimed.halfWidth / CLOSE, claimed.halfWidth * CLOSE]) {
+  // The audit adds what rounding may do to the error; without a reference it knows truth no better than doubles do.
+  const { leftOpen } = known;
+  for (const e of [error, error + CLOSE * rounding + leftOpen]) {
+    for (const d of [Math.max(0, distance - leftOpen), distance, distance + leftOpen]) {
       for (const trusted of isMistyped ? [false] : convergence(known)) {
-        right.add(verdict(truth, distance, e, { ...claimed, halfWidth: u }, trusted));
+        right.add(verdict(truth, d, e, claimed, trusted));
       }
     }
   }
