@@ -10,6 +10,7 @@ import { ledgerOf } from "./ledger.js";
 import { createPool, type JobPool } from "./pool.js";
 import { type Prepared, prepare } from "./prepare.js";
 import { provenance } from "./provenance.js";
+import { roundingOf } from "./rounding.js";
 import { setupOf } from "./setup.js";
 import { claimedOf, undetermined } from "./undetermined.js";
 
@@ -58,6 +59,7 @@ export async function auditClaim(claim: Claim, pool: JobPool, options: AuditOpti
       extrapolated: investigation.extrapolated && intervalOf(investigation.extrapolated),
       says: bestInWords(investigation, unit.text),
     },
+    rounding: roundingOf(investigation.solution, claim.scenario.equations.form === "time"),
     reference: referenceOf(investigation, unit.text),
     ladders,
     ledger,

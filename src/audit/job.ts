@@ -72,6 +72,8 @@ export interface Reading {
   /** Mean radial period: s, or rad. */
   readonly period: number | null;
   readonly numbers: readonly number[];
+  /** Independent variable at each passage, from the start. */
+  readonly times: readonly number[];
   /** Apsidal angle at each passage less the first and whole turns, rad. */
   readonly advances: readonly number[];
   readonly evaluations: number;

@@ -9,6 +9,7 @@ import type { PreparedScenario } from "../measure/run.js";
 import { figureOf } from "./figure.js";
 import type { Reading } from "./job.js";
 import type { MethodRuns } from "./method-runs.js";
+import { apsisGrowthOf } from "./rounding.js";
 
 /** One method's ladder, analysed; figures in the claim's unit. */
 export interface AnalysedLadder {
@@ -92,9 +93,9 @@ function coefficientPush(
 
 /**
  * What rounding does to each rung's figure. Its random part is the spread of the ensemble, its common part how
- * far the ensemble's mean is from the run that rounds less. Both walk at random with the number of steps, as
- * its square root (D. Brouwer, A. J. 46, 149, 1937); on rungs coarser than the ensemble's they are not taken to
- * be less.
+ * far the ensemble's mean is from the run that rounds less. What walks at random grows as the square root of the
+ * number of steps (D. Brouwer, A. J. 46, 149, 1937), what pushes one way as the number itself: the members'
+ * growth in time says which. On rungs coarser than the ensemble's it is not taken to be less.
  */
 function withFloor(
   runs: MethodRuns,
@@ -105,7 +106,8 @@ function withFloor(
   const members = ensemble.on.map((on, i) => figure(on, ensemble.off[i] ?? null));
   const spread = roundingHalfWidth(members) ?? 0;
   const common = commonRounding(members, figure(ensemble.lessRounded.on, ensemble.lessRounded.off));
-  const growth = (k: number) => Math.max(1, 2 ** ((k - ensemble.rung) / 2));
+  const exponent = Math.min(1, Math.max(0.5, apsisGrowthOf(ensemble) ?? 0.5));
+  const growth = (k: number) => Math.max(1, 2 ** ((k - ensemble.rung) * exponent));
   return rungs.map(({ on, off }, k) => ({
     value: figure(on, off),
     floor: Math.hypot(push, Math.hypot(spread, common) * growth(k)),

@@ -134,6 +134,7 @@ function read(run: Run): Reading {
     advanceError: advance?.perOrbitError ?? null,
     period: advance?.radialPeriod ?? null,
     numbers: run.numbers,
+    times: run.times,
     advances: run.advances,
     evaluations: run.evaluations,
     seconds: run.seconds,

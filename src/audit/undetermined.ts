@@ -24,6 +24,7 @@ export function undetermined(
     crossReading: null,
     best: { value: null, halfWidth: null, from: null, extrapolated: null, says: "Nothing was run." },
     reference: null,
+    rounding: null,
     checks: [
       { name: "reproduces", outcome: "not-checked", figure: null, limit: null, unit: "", says: reason },
     ],

@@ -100,6 +100,16 @@ export interface ClaimResult {
     readonly evaluations: number | null;
     readonly says: string;
   } | null;
+  /**
+   * What rounding does to the author's run, from runs whose starts differ in the last bits: as far as the passages
+   * let it be measured. Null without a solution.
+   */
+  readonly rounding: {
+    /** Exponents in time of the spread of the apsis and of the passage times; null where too few passages tell. */
+    readonly apsisGrowth: number | null;
+    readonly phaseGrowth: number | null;
+    readonly says: string;
+  } | null;
   readonly checks: readonly Check[];
   readonly budget: Budget | null;
   readonly ladders: readonly Ladder[];

@@ -74,6 +74,7 @@ const result: ClaimResult = {
   crossReading: null,
   best: { value: 40, halfWidth: 1e-6, from: "extrapolation", extrapolated: null, says: "" },
   reference: null,
+  rounding: null,
   checks: [check("reproduces", "pass"), check("carries-digits", "fail")],
   budget: {
     truncation: 2,
@@ -110,6 +111,7 @@ describe("the caption of the intervals", () => {
       intervalsCaption({
         ...result,
         reference: null,
+        rounding: null,
         checks: [check("reproduces", reproduces), check("carries-digits", carries)],
       });
     expect(at("pass", "pass")).toContain("falls on both");

@@ -80,6 +80,7 @@ const solved: ClaimResult = {
     says: "The limit of a witness.",
   },
   reference: null,
+  rounding: null,
   checks: NAMES.map((name, k) => ({
     name,
     outcome: OUTCOMES[k % 4]!,
