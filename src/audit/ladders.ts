@@ -9,7 +9,7 @@ import type { PreparedScenario } from "../measure/run.js";
 import { figureOf } from "./figure.js";
 import type { Reading } from "./job.js";
 import type { MethodRuns } from "./method-runs.js";
-import { apsisGrowthOf } from "./rounding.js";
+import { roundingGrowth } from "./rounding.js";
 
 /** One method's ladder, analysed; figures in the claim's unit. */
 export interface AnalysedLadder {
@@ -106,7 +106,7 @@ function withFloor(
   const members = ensemble.on.map((on, i) => figure(on, ensemble.off[i] ?? null));
   const spread = roundingHalfWidth(members) ?? 0;
   const common = commonRounding(members, figure(ensemble.lessRounded.on, ensemble.lessRounded.off));
-  const exponent = Math.min(1, Math.max(0.5, apsisGrowthOf(ensemble) ?? 0.5));
+  const exponent = roundingGrowth(ensemble);
   const growth = (k: number) => Math.max(1, 2 ** ((k - ensemble.rung) * exponent));
   return rungs.map(({ on, off }, k) => ({
     value: figure(on, off),

@@ -8,8 +8,14 @@ const NEAR = 0.3;
 const WALK = 0.5;
 
 /** How the apsides of an ensemble's members spread in time. */
-export function apsisGrowthOf({ on }: Ensemble): number | null {
+function apsisGrowthOf({ on }: Ensemble): number | null {
   return spreadExponent(on.flatMap((reading) => (reading === null ? [] : [reading.advances])));
+}
+
+/** Exponent in the number of steps with which rounding grows: a half, unless it is seen to push one way. */
+export function roundingGrowth(ensemble: Ensemble): number {
+  const growth = apsisGrowthOf(ensemble) ?? WALK;
+  return growth - WALK > NEAR ? Math.min(1, growth) : WALK;
 }
 
 /**

@@ -1,5 +1,9 @@
 import { type Calibration, type Coverage, type Share, verdicts } from "../result/calibration.js";
+import type { Verdict } from "../result/result.js";
 import { size } from "../result/words.js";
+import { wrap } from "./text.js";
+
+const WIDTH = 80;
 
 /** A calibration as text of 80 columns: what held, the table of verdicts, every miss. */
 export function calibrationText(calibration: Calibration): string {
@@ -12,7 +16,7 @@ export function calibrationText(calibration: Calibration): string {
     `  where the rules leave but one       ${share(calibration.clearVerdicts)}`,
     `digits right, give or take one         ${share(calibration.digits)}`,
     "",
-    "half-widths, 95 %                      reach truth              by its error, median",
+    "half-widths, 95 %                   reach truth          times the error, median",
     covered("best value, reference", best.reference),
     covered("best value, extrapolation", best.extrapolation),
     covered("error of the author's solution", calibration.error),
@@ -23,11 +27,8 @@ export function calibrationText(calibration: Calibration): string {
     ...table(calibration),
   ];
   for (const { name, what, right, verdict, reason } of misses) {
-    lines.push(
-      "",
-      `${name}: ${what.join(", ")}`,
-      `  ${verdict}, where ${right.join(" or ")} is right. ${reason}`,
-    );
+    const told = `${verdict}, where ${right.join(" or ")} is right. ${reason}`;
+    lines.push("", `${name}: ${what.join(", ")}`, ...wrap(told, WIDTH - 2).map((line) => `  ${line}`));
   }
   return `${lines.join("\n")}\n`;
 }
@@ -38,19 +39,32 @@ const share = (given: Share): string => `${percent(given).padStart(8)}   ${given
 function covered(what: string, given: Coverage): string {
   const times = (ratio: number | null): string => (ratio === null ? "" : size(ratio));
   const above = given.tightnessAboveRounding;
-  const ratio = times(given.tightness) + (above === null ? "" : `, above rounding ${times(above)}`);
-  return `${what.padEnd(39)}${share(given).padEnd(25)}${ratio}`.trimEnd();
+  const ratio = times(given.tightness) + (above === null ? "" : `; ${times(above)} clear of rounding`);
+  return `${what.padEnd(36)}${share(given).padEnd(22)}${ratio}`.trimEnd();
 }
+
+const HEADS: Readonly<Record<Verdict, string>> = {
+  resolved: "resolved",
+  "partly-resolved": "partly",
+  "not-resolved": "not",
+  contradicted: "contradicted",
+  undetermined: "undetermined",
+};
 
 /** Right verdicts down, given ones across. */
 function table({ confusion }: Calibration): string[] {
-  const width = 16;
-  const head = `${"right \\ given".padEnd(width)}${verdicts.map((name) => name.padStart(width - 1)).join("")}`;
+  const row = (label: string, cells: readonly string[]): string =>
+    label.padEnd(18) + cells.map((cell, i) => cell.padStart(HEADS[verdicts[i]!].length + 2)).join("");
   return [
-    head,
-    ...verdicts.map(
-      (right) =>
-        `${right.padEnd(width)}${verdicts.map((given) => String(confusion[right][given] || "·").padStart(width - 1)).join("")}`,
+    row(
+      "right, and given",
+      verdicts.map((name) => HEADS[name]),
+    ),
+    ...verdicts.map((right) =>
+      row(
+        right,
+        verdicts.map((given) => String(confusion[right][given] || "·")),
+      ),
     ),
   ];
 }

@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import packageJson from "../../package.json" with { type: "json" };
 import { cupel } from "./cupel.js";
 
-const COMMANDS = ["audit", "catalog", "schema"];
+const COMMANDS = ["audit", "calibrate", "catalog", "schema"];
 
 describe("help", () => {
   it("of the program lists every command, with examples and exit codes", async () => {
@@ -45,7 +45,10 @@ describe("help", () => {
 describe.concurrent("a wrong call", () => {
   it.each<[args: string[], says: string]>([
     [["catalogue"], "found the unknown command 'catalogue'; wanted 'catalog'?"],
-    [["frobnicate"], "found the unknown command 'frobnicate'; wanted one of audit, catalog, schema"],
+    [
+      ["frobnicate"],
+      "found the unknown command 'frobnicate'; wanted one of audit, calibrate, catalog, schema",
+    ],
     [["--jsno"], "found '--jsno' before the command; wanted the command first"],
     [["audit"], "found no claim to audit; wanted files or globs"],
     [["audit", "a.yaml", "--jsno", "x"], "found the unknown option '--jsno'; wanted '--json'?"],
