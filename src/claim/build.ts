@@ -4,6 +4,7 @@ import { readAuditSettings } from "./audit-settings.js";
 import type { Claim, Claimed, Scenario } from "./claim.js";
 import { parseClaimedValue } from "./claimed-value.js";
 import { readParameters } from "./parameters.js";
+import { preciseOf, valuesOf } from "./quantity.js";
 import type { Reporter } from "./reporter.js";
 import type { PartialClaim } from "./schema.js";
 import { readSolution } from "./solution.js";
@@ -59,5 +60,16 @@ function readScenario(
   const parameters = equations && readParameters(raw.parameters ?? {}, equations, report);
   const start = raw.start === undefined ? null : readStart(raw.start, equations, report);
   const span = raw.span === undefined ? null : readSpan(raw.span, equations, report);
-  return equations && parameters && start && span && { equations, parameters, start, span };
+  return (
+    equations &&
+    parameters &&
+    start &&
+    span && {
+      equations,
+      parameters: valuesOf(parameters),
+      start: start.start,
+      span,
+      precise: { parameters: preciseOf(parameters), start: start.precise },
+    }
+  );
 }

@@ -1,3 +1,4 @@
+import type { DoubleDouble } from "../arithmetic/double-double.js";
 import type { EquationsDefinition } from "../equations/definition.js";
 import type { MethodDefinition } from "../methods/definition.js";
 
@@ -44,7 +45,16 @@ export interface Scenario {
   /** By claim name; only what the claim gave. */
   readonly parameters: Readonly<Record<string, number>>;
   readonly start: Start;
+  readonly precise: PreciseScenario;
   readonly span: Span;
+}
+
+/** What the claim gives of its scenario, to 31 digits: numbers and units as written, not as doubles round them. */
+export interface PreciseScenario {
+  /** By claim name. */
+  readonly parameters: Readonly<Record<string, DoubleDouble>>;
+  /** By the names of `Start`: elements, or the equations' own variables. */
+  readonly start: Readonly<Record<string, DoubleDouble>>;
 }
 
 export type Start =

@@ -1,4 +1,5 @@
 import Fraction from "fraction.js";
+import { type DoubleDouble, fromFraction } from "../arithmetic/double-double.js";
 import { exactDecimal } from "../formula/decimal.js";
 import { nearestDouble } from "../formula/nearest-double.js";
 import { nearest } from "./nearest.js";
@@ -9,6 +10,8 @@ import { NO_UNIT, parseUnit, sameDimension, type Unit, unitsCatalog } from "./un
 export interface Quantity {
   /** In SI: the double nearest to the exact product of number and unit. */
   readonly value: number;
+  /** The same to 31 digits. */
+  readonly precise: DoubleDouble;
   /** As written, and its size in SI. */
   readonly unit: string;
   readonly unitSize: number;
@@ -75,8 +78,10 @@ export function parseQuantity(input: string | number, wanted: string): Quantity 
   const exact = sensibleDecimal(number);
   if (exact === null)
     return { found: echo(input), wanted: `a size between 1e-${LARGEST_EXPONENT} and 1e${LARGEST_EXPONENT}` };
+  const product = exact.mul(unit.size);
   return {
-    value: nearestDouble(exact.mul(unit.size)),
+    value: nearestDouble(product),
+    precise: fromFraction(product),
     unit: unitText,
     unitSize: nearestDouble(unit.size),
   };
@@ -89,3 +94,9 @@ function unitsOf({ dimension }: Unit): string[] {
     .filter(({ unit }) => kinds.some((kind) => unit.dimension[kind] !== 0))
     .map(({ name }) => name);
 }
+
+export const valuesOf = (quantities: Readonly<Record<string, Quantity>>): Record<string, number> =>
+  Object.fromEntries(Object.entries(quantities).map(([name, { value }]) => [name, value]));
+
+export const preciseOf = (quantities: Readonly<Record<string, Quantity>>): Record<string, DoubleDouble> =>
+  Object.fromEntries(Object.entries(quantities).map(([name, { precise }]) => [name, precise]));

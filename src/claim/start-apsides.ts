@@ -1,10 +1,14 @@
+import { add, fromFraction, multiply, ONE, subtract } from "../arithmetic/double-double.js";
+import { exactDecimal } from "../formula/decimal.js";
 import { echo } from "./problem.js";
+import type { Quantity } from "./quantity.js";
 import { POSITIVE, type Reporter } from "./reporter.js";
 import { type PartialStart, START } from "./start-raw.js";
 
+type Size = Pick<Quantity, "value" | "precise">;
 interface Apsides {
-  readonly periapsis: number;
-  readonly apoapsis: number;
+  readonly periapsis: Size;
+  readonly apoapsis: Size;
 }
 
 const SIZES = ["periapsis", "apoapsis", "semi-major-axis", "eccentricity"] as const;
@@ -39,7 +43,7 @@ function fromDistances(raw: PartialStart, report: Reporter): Apsides | null {
     report.at([...START, "apoapsis"], { found: echo(raw.apoapsis), wanted: `more than the periapsis${why}` });
     return null;
   }
-  return { periapsis: periapsis.value, apoapsis: apoapsis.value };
+  return { periapsis, apoapsis };
 }
 
 function fromAxis(raw: PartialStart, report: Reporter): Apsides | null {
@@ -52,5 +56,11 @@ function fromAxis(raw: PartialStart, report: Reporter): Apsides | null {
     report.at([...START, "eccentricity"], { found: echo(e), wanted: `more than 0 and less than 1${why}` });
     return null;
   }
-  return axis && { periapsis: axis.value * (1 - e), apoapsis: axis.value * (1 + e) };
+  if (axis === null) return null;
+  // What was written is the decimal.
+  const precise = fromFraction(exactDecimal(String(e)));
+  return {
+    periapsis: { value: axis.value * (1 - e), precise: multiply(axis.precise, subtract(ONE, precise)) },
+    apoapsis: { value: axis.value * (1 + e), precise: multiply(axis.precise, add(ONE, precise)) },
+  };
 }

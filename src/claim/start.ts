@@ -1,9 +1,10 @@
+import { ZERO } from "../arithmetic/double-double.js";
 import type { EquationsDefinition } from "../equations/definition.js";
-import type { Start } from "./claim.js";
 import { echo } from "./problem.js";
+import type { Quantity } from "./quantity.js";
 import type { Range, Reporter } from "./reporter.js";
 import { readApsides } from "./start-apsides.js";
-import { type PartialStart, START } from "./start-raw.js";
+import { type PartialStart, type ReadStart, START } from "./start-raw.js";
 import { readState } from "./start-state.js";
 
 const TURN: Range = {
@@ -19,12 +20,12 @@ const ORIENTATION: Readonly<
   "true-anomaly": TURN,
 };
 
-/** The starting state in SI; null, with problems noted, when it is not one. */
+/** The starting state; null, with problems noted, when it is not one. */
 export function readStart(
   raw: PartialStart,
   equations: EquationsDefinition | null,
   report: Reporter,
-): Start | null {
+): ReadStart | null {
   return raw.state !== undefined || report.isToldWithin([...START, "state"])
     ? readState(raw, equations, report)
     : readElements(raw, equations, report);
@@ -34,14 +35,14 @@ function readElements(
   raw: PartialStart,
   equations: EquationsDefinition | null,
   report: Reporter,
-): Start | null {
+): ReadStart | null {
   const apsides = readApsides(raw, report);
   const inclination = readAngle("inclination", raw, equations, report);
   const node = readAngle("node", raw, equations, report);
   const argumentOfPeriapsis = readAngle("argument-of-periapsis", raw, equations, report);
   const trueAnomaly = readAngle("true-anomaly", raw, equations, report);
   const turningPoints = raw["turning-points"] ?? false;
-  if (turningPoints && trueAnomaly !== 0 && trueAnomaly !== null) {
+  if (turningPoints && trueAnomaly !== null && trueAnomaly.value !== 0) {
     report.at([...START, "true-anomaly"], {
       found: echo(raw["true-anomaly"]),
       wanted: "0 or no such key: exact turning points start at periapsis",
@@ -56,8 +57,24 @@ function readElements(
   ) {
     return null;
   }
-  return { kind: "elements", ...apsides, inclination, node, argumentOfPeriapsis, trueAnomaly, turningPoints };
+  const read = { ...apsides, inclination, node, argumentOfPeriapsis, trueAnomaly };
+  const value = (name: keyof typeof read): number => read[name].value;
+  return {
+    start: {
+      kind: "elements",
+      periapsis: value("periapsis"),
+      apoapsis: value("apoapsis"),
+      inclination: value("inclination"),
+      node: value("node"),
+      argumentOfPeriapsis: value("argumentOfPeriapsis"),
+      trueAnomaly: value("trueAnomaly"),
+      turningPoints,
+    },
+    precise: Object.fromEntries(Object.entries(read).map(([name, { precise }]) => [name, precise])),
+  };
 }
+
+type Angle = Pick<Quantity, "value" | "precise">;
 
 /** An angle of the orientation in rad, 0 when left out; null, with a problem noted, when it is not right. */
 function readAngle(
@@ -65,9 +82,9 @@ function readAngle(
   raw: PartialStart,
   equations: EquationsDefinition | null,
   report: Reporter,
-): number | null {
+): Angle | null {
   const input = raw[name];
-  if (input === undefined) return 0;
+  if (input === undefined) return { value: 0, precise: ZERO };
   if (equations?.form === "angle") {
     report.atKey([...START, name], {
       found: `'${name}'`,
@@ -75,5 +92,5 @@ function readAngle(
     });
     return null;
   }
-  return report.quantity([...START, name], input, "rad", ORIENTATION[name])?.value ?? null;
+  return report.quantity([...START, name], input, "rad", ORIENTATION[name]);
 }

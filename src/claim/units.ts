@@ -1,4 +1,5 @@
 import Fraction from "fraction.js";
+import { PI } from "../arithmetic/words.js";
 
 /** Powers of length, time and angle. */
 export interface Dimension {
@@ -8,7 +9,7 @@ export interface Dimension {
 }
 
 export interface Unit {
-  /** Size in SI: exact, but for the 60 digits of π in an angle. */
+  /** Size in SI: exact, but for the 100 digits of π in an angle. */
   readonly size: Fraction;
   readonly dimension: Dimension;
 }
@@ -31,8 +32,6 @@ const time = (size: string | number): Unit => ({
   size: new Fraction(size),
   dimension: { length: 0, time: 1, angle: 0 },
 });
-/** Far more digits than a double's 17, so that products still round as those of π itself. */
-const PI = new Fraction("3.14159265358979323846264338327950288419716939937510582097494");
 const partOfPi = (size: string): Unit => ({
   size: PI.mul(size),
   dimension: { length: 0, time: 0, angle: 1 },

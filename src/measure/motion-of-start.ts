@@ -9,7 +9,7 @@ import type { StartProblem } from "./started.js";
  * @param shoot the speed at the periapsis of an orbit with exact turning points; null where there is none
  */
 export function motionOfStart(
-  { equations, start }: Scenario,
+  { equations, start }: Omit<Scenario, "precise">,
   GM: number | null,
   shoot: (motionAt: (speed: number) => Motion, periapsis: number, apoapsis: number) => number | null,
 ): Motion | StartProblem {

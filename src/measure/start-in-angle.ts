@@ -15,7 +15,7 @@ const STEPS_PER_TURN = 512;
  * semi-latus rectum p. From elements u = (1 + e cos ν)/p and u' = -e sin ν / p, with p = rp (1 + e).
  */
 export function startInAngle(
-  scenario: Scenario,
+  scenario: Omit<Scenario, "precise">,
   system: SystemShape,
   fineLoop: () => StepLoop,
 ): Started | StartProblem {

@@ -13,7 +13,7 @@ const STEPS_PER_RADIAN = 32;
 
 /** The start of a scenario in time: its state, osculating orbit, and how its apsidal angle is measured. */
 export function startInTime(
-  scenario: Scenario,
+  scenario: Omit<Scenario, "precise">,
   system: SystemShape,
   fineLoop: () => StepLoop,
 ): Started | StartProblem {

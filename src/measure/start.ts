@@ -2,7 +2,7 @@ import type { Scenario } from "../claim/claim.js";
 import type { StepLoop } from "../kernel/step-loop.js";
 import { radialTurn } from "./instant.js";
 import { cosineAndSine } from "./orientation.js";
-import { startOfDoubles } from "./precise-start.js";
+import { preciseStart, startOfDoubles } from "./precise-start.js";
 import type { PreparedScenario } from "./run.js";
 import { startInAngle } from "./start-in-angle.js";
 import { startInTime } from "./start-in-time.js";
@@ -12,7 +12,7 @@ import type { StartProblem, SystemShape } from "./started.js";
 const LEAST_ECCENTRICITY = 1e-12;
 
 /** True where the whole motion stays in the xy plane, so that a system may leave the third dimension out. */
-export function isPlanar({ equations, start }: Scenario): boolean {
+export function isPlanar({ equations, start }: GivenScenario): boolean {
   if (equations.form === "angle") return false;
   if (start.kind === "elements") return cosineAndSine(start.inclination)[1] === 0;
   return (start.values.z ?? 0) === 0 && (start.values.vz ?? 0) === 0;
@@ -22,7 +22,7 @@ export function isPlanar({ equations, start }: Scenario): boolean {
  * The parameters that a system must leave open for a scenario: those that the claim gives, and those whose
  * default is not where they vanish, since the null run changes them.
  */
-export function openParameters({ equations, parameters }: Scenario): string[] {
+export function openParameters({ equations, parameters }: GivenScenario): string[] {
   return Object.entries(equations.parameters)
     .filter(
       ([name, { default: value, vanishesAt }]) =>
@@ -30,6 +30,9 @@ export function openParameters({ equations, parameters }: Scenario): string[] {
     )
     .map(([name]) => name);
 }
+
+/** A scenario of a claim; one that is made up may be known in doubles alone. */
+export type GivenScenario = Omit<Scenario, "precise"> & Partial<Pick<Scenario, "precise">>;
 
 /**
  * Makes a scenario ready to step.
@@ -39,7 +42,7 @@ export function openParameters({ equations, parameters }: Scenario): string[] {
  *   its own: for exact turning points, for equations without GM, and for which apsis a start at one is
  */
 export function prepareScenario(
-  scenario: Scenario,
+  scenario: GivenScenario,
   system: SystemShape,
   fineLoop: () => StepLoop,
 ): PreparedScenario | StartProblem {
@@ -64,11 +67,15 @@ export function prepareScenario(
     radialTurn(fineLoop(), prepared.state, parameters, instant) > 0;
   const startsAtPeriapsis =
     atApsis && turnsOutward(prepared.parameters) && turnsOutward(nullParameters ?? prepared.parameters);
-  const precise = startOfDoubles({ ...prepared, nullParameters });
+  const doubles = { ...prepared, nullParameters };
+  const precise =
+    scenario.precise === undefined
+      ? startOfDoubles(doubles)
+      : preciseStart(scenario, scenario.precise, system, doubles);
   return { ...prepared, nullParameters, precise, startsAtPeriapsis, span };
 }
 
-function spanOf({ equations, span }: Scenario): PreparedScenario["span"] | StartProblem {
+function spanOf({ equations, span }: GivenScenario): PreparedScenario["span"] | StartProblem {
   if (span.kind === "orbits") return { kind: "orbits", count: span.count };
   if (span.kind === equations.form) return { kind: "length", length: span.length };
   const wanted = equations.form === "angle" ? "an angle" : "a time";

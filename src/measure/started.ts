@@ -31,7 +31,7 @@ export const AT_APSIS = 1e-12;
  * start gives.
  */
 export function parameterValues(
-  { equations, parameters }: Scenario,
+  { equations, parameters }: Omit<Scenario, "precise">,
   system: SystemShape,
   fromStart: Readonly<Record<string, number>> = {},
 ): number[] | StartProblem {

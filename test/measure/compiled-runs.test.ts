@@ -1,6 +1,5 @@
 import ellipk from "@stdlib/math-base-special-ellipk";
 import { describe, expect, it } from "vitest";
-import type { Scenario } from "../../src/claim/claim.js";
 import { findEquations } from "../../src/equations/catalog/index.js";
 import { appliesTo } from "../../src/kernel/applies-to.js";
 import { compileStepLoop } from "../../src/kernel/compile.js";
@@ -11,6 +10,7 @@ import { earlySteps, stateAfter, stateDistance } from "../../src/measure/early-s
 import { eccentricityDrift } from "../../src/measure/eccentricity-vector.js";
 import { runLedger } from "../../src/measure/ledger.js";
 import { runPassages } from "../../src/measure/passages.js";
+import type { GivenScenario } from "../../src/measure/start.js";
 import { isPlanar, openParameters, prepareScenario } from "../../src/measure/start.js";
 import { findMethod, methodsCatalog } from "../../src/methods/catalog/index.js";
 import { handLoop, postNewtonian } from "./hand-loop.js";
@@ -19,13 +19,13 @@ import { ARCSEC, CENTURY, keplerState } from "./scenarios.js";
 interface Given {
   readonly equations: string;
   readonly parameters: Readonly<Record<string, number>>;
-  readonly start: Partial<Extract<Scenario["start"], { kind: "elements" }>>;
+  readonly start: Partial<Extract<GivenScenario["start"], { kind: "elements" }>>;
   readonly orbits: number;
 }
 
 /** A scenario of the catalog by elements, and its runs by any method. */
 function bench({ equations, parameters, start, orbits }: Given) {
-  const scenario: Scenario = {
+  const scenario: GivenScenario = {
     equations: findEquations(equations)!,
     parameters,
     start: {

@@ -1,8 +1,9 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import type { Scenario, Start } from "../../src/claim/claim.js";
+import type { Start } from "../../src/claim/claim.js";
 import type { EquationsDefinition } from "../../src/equations/definition.js";
 import type { StepLoop } from "../../src/kernel/step-loop.js";
+import type { GivenScenario } from "../../src/measure/start.js";
 import { isPlanar, prepareScenario } from "../../src/measure/start.js";
 import { handLoop, kepler } from "./hand-loop.js";
 import { keplerState } from "./scenarios.js";
@@ -54,18 +55,22 @@ const elements = (given: Partial<Extract<Start, { kind: "elements" }>>): Start =
   turningPoints: false,
   ...given,
 });
-const scenario = (start: Start, equations = inTime): Scenario => ({
+const scenario = (start: Start, equations = inTime): GivenScenario => ({
   equations,
   parameters: { GM: 2 },
   start,
   span: { kind: "orbits", count: 5, text: "5 orbits" },
 });
-function prepared(given: Scenario, system = planar, loop: () => StepLoop = () => newtonian(system)) {
+function prepared(given: GivenScenario, system = planar, loop: () => StepLoop = () => newtonian(system)) {
   const made = prepareScenario(given, system, loop);
   if ("problem" in made) throw new Error(made.problem);
   return made;
 }
-function problem(given: Scenario, system = planar, loop: () => StepLoop = () => newtonian(system)): string {
+function problem(
+  given: GivenScenario,
+  system = planar,
+  loop: () => StepLoop = () => newtonian(system),
+): string {
   const made = prepareScenario(given, system, loop);
   return "problem" in made ? made.problem : "none";
 }
@@ -166,7 +171,7 @@ describe("osculating elements", () => {
 });
 
 describe("a starting state", () => {
-  const state = (values: Record<string, number>, equations = inTime): Scenario =>
+  const state = (values: Record<string, number>, equations = inTime): GivenScenario =>
     scenario({ kind: "state", values }, equations);
 
   it("is taken as it stands, with the ellipse that osculates it", () => {

@@ -1,4 +1,4 @@
-import type { Scenario, Start } from "../../src/claim/claim.js";
+import type { Start } from "../../src/claim/claim.js";
 import type { EquationsDefinition } from "../../src/equations/definition.js";
 import { compileStepLoop } from "../../src/kernel/compile.js";
 import type { StepLoop } from "../../src/kernel/step-loop.js";
@@ -6,6 +6,7 @@ import { compileSystem } from "../../src/kernel/system.js";
 import { type Advance, apsidalAdvance } from "../../src/measure/advance.js";
 import { runPassages } from "../../src/measure/passages.js";
 import type { PreparedScenario, Run } from "../../src/measure/run.js";
+import type { GivenScenario } from "../../src/measure/start.js";
 import { isPlanar, openParameters, prepareScenario } from "../../src/measure/start.js";
 import { findMethod } from "../../src/methods/catalog/index.js";
 
@@ -39,7 +40,12 @@ export function orbitOf(
   start: Start,
   orbits: number,
 ): Orbit {
-  const given: Scenario = { equations, parameters, start, span: { kind: "orbits", count: orbits, text: "" } };
+  const given: GivenScenario = {
+    equations,
+    parameters,
+    start,
+    span: { kind: "orbits", count: orbits, text: "" },
+  };
   const system = compileSystem(equations, { parameters: openParameters(given), planar: isPlanar(given) });
   const loop = (method: string): StepLoop => compileStepLoop(system, findMethod(method)!);
   const scenario = prepareScenario(given, system, () => loop("dormand-prince-8"));

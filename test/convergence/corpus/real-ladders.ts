@@ -1,5 +1,4 @@
 import ellipk from "@stdlib/math-base-special-ellipk";
-import type { Scenario } from "../../../src/claim/claim.js";
 import { lastBitEnsemble, roundingHalfWidth } from "../../../src/convergence/rounding.js";
 import { findEquations } from "../../../src/equations/catalog/index.js";
 import type { EquationsDefinition } from "../../../src/equations/definition.js";
@@ -10,6 +9,7 @@ import { compileSystem } from "../../../src/kernel/system.js";
 import { apsidalAdvance } from "../../../src/measure/advance.js";
 import { runPassages } from "../../../src/measure/passages.js";
 import type { PreparedScenario } from "../../../src/measure/run.js";
+import type { GivenScenario } from "../../../src/measure/start.js";
 import { isPlanar, openParameters, prepareScenario } from "../../../src/measure/start.js";
 import { findMethod, methodsCatalog } from "../../../src/methods/catalog/index.js";
 import { elements } from "../../published/orbit.js";
@@ -70,7 +70,7 @@ export function realLadders(orbits: number): Case[] {
 function laddersOf(setting: Setting, orbits: number): Case[] {
   const equations: EquationsDefinition = findEquations(setting.equations)!;
   const { periapsis, apoapsis, turningPoints } = setting;
-  const given: Scenario = {
+  const given: GivenScenario = {
     equations,
     parameters: setting.parameters,
     start: elements(periapsis, apoapsis, { turningPoints }),
