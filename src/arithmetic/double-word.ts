@@ -54,12 +54,6 @@ export function add<T>(m: Machine<T>, x: Pair<T>, y: Pair<T>): Pair<T> {
   return fastTwoSum(m, v.high, m.add(t.low, v.low));
 }
 
-/** The same with the signs of y turned. */
-export function subtract<T>(m: Machine<T>, x: Pair<T>, y: Pair<T>): Pair<T> {
-  const zero = m.constant(0);
-  return add(m, x, { high: m.subtract(zero, y.high), low: m.subtract(zero, y.low) });
-}
-
 /** Algorithm 7, DWTimesFP1: 2u². */
 export function scale<T>(m: Machine<T>, x: Pair<T>, y: T): Pair<T> {
   const c = twoProduct(m, x.high, y);

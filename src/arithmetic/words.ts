@@ -10,7 +10,7 @@ export const LN2 = new Fraction(
 );
 
 /** A double as the fraction that it is; the library's own reading of a number looks for a simple one nearby. */
-export function fractionOf(value: number): Fraction {
+function fractionOf(value: number): Fraction {
   let scaled = value;
   let halvings = 0;
   // A double is a whole number of at most 53 bits times a power of two.

@@ -14,7 +14,7 @@ export interface Lengths {
 }
 
 /** Where the low part of `$step` is among the parameters: after the low parts of them all. */
-export const stepRestAt = ({ parameters }: Lengths): number => 2 * parameters;
+const stepRestAt = ({ parameters }: Lengths): number => 2 * parameters;
 
 function arithmeticOf(lengths: Lengths): Arithmetic<Pair> {
   const lowLoad = ({ from, index }: Load): Load => ({ from, index: index + lengths[from] });

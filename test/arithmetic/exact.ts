@@ -6,7 +6,7 @@ export const Decimal = Base.clone({ precision: 120, toExpNeg: -40, toExpPos: 40 
 export type Exact = InstanceType<typeof Decimal>;
 
 /** u² with u = 2^-53: the unit of the published bounds. */
-export const U2 = 2 ** -106;
+const U2 = 2 ** -106;
 
 /** A double to all its bits; the library's own reading of a number takes its 17 printed digits. */
 export function ofDouble(value: number): Exact {

@@ -4,7 +4,7 @@ import { gridConvergenceIndex } from "./grid-convergence-index.js";
 import { leastSquares } from "./least-squares.js";
 import { verifiedExtrapolants } from "./verified-extrapolants.js";
 
-export type { Estimate, Estimator, LadderTraits } from "./estimator.js";
+export type { Estimator } from "./estimator.js";
 
 /** The published procedures, and the one that `analyseLadder` uses. */
 export const estimators: readonly Estimator[] = [

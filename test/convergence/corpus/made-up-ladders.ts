@@ -3,7 +3,7 @@ import { ENSEMBLE_SIZE, roundingHalfWidth } from "../../../src/convergence/round
 import { type Case, cutShort } from "./case.js";
 
 /** A linear congruential generator (W. H. Press et al., Numerical Recipes (1992), §7.1, ranqd1): uniform in [0, 1). */
-export function seeded(seed: number): () => number {
+function seeded(seed: number): () => number {
   let state = seed >>> 0;
   return () => {
     state = (Math.imul(1664525, state) + 1013904223) >>> 0;
