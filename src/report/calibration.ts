@@ -16,13 +16,13 @@ export function calibrationText(calibration: Calibration): string {
     `  where the rules leave but one       ${share(calibration.clearVerdicts)}`,
     `digits right, give or take one         ${share(calibration.digits)}`,
     "",
-    "half-widths, 95 %                   reach truth          times the error, median",
+    "half-widths, 95 %            reach truth              times the error, median",
     covered("best value, reference", best.reference),
     covered("best value, extrapolation", best.extrapolation),
-    covered("error of the author's solution", calibration.error),
+    covered("error of the solution", calibration.error),
     covered("witnesses' ladders together", calibration.fromLadders),
     covered("one ladder, asymptotic", ladders.asymptotic),
-    covered("one ladder, any that gives a limit", ladders.all),
+    covered("one ladder, any", ladders.all),
     "",
     ...table(calibration),
   ];
@@ -39,8 +39,8 @@ const share = (given: Share): string => `${percent(given).padStart(8)}   ${given
 function covered(what: string, given: Coverage): string {
   const times = (ratio: number | null): string => (ratio === null ? "" : size(ratio));
   const above = given.tightnessAboveRounding;
-  const ratio = times(given.tightness) + (above === null ? "" : `; ${times(above)} clear of rounding`);
-  return `${what.padEnd(36)}${share(given).padEnd(22)}${ratio}`.trimEnd();
+  const ratio = times(given.tightness) + (above === null ? "" : `; ${times(above)} above rounding`);
+  return `${what.padEnd(29)}${share(given).padEnd(25)}${ratio}`.trimEnd();
 }
 
 const HEADS: Readonly<Record<Verdict, string>> = {
