@@ -23,6 +23,7 @@ export function setupOf(claim: Claim, { system, scenario, witnesses, authorsStep
     start: system.states.map((name, i) => ({ name, value: scenario.state[i]!, unit: unitOf(claim, name) })),
     span: claim.scenario.span.text,
     method: claim.solution && describe(claim.solution.method),
+    arithmetic: claim.solution?.arithmetic ?? null,
     step: claim.solution?.step.text ?? null,
     stepsPerOrbit: authorsStep === null ? null : scenario.period / authorsStep,
     witnesses: witnesses.map(describe),

@@ -1,6 +1,6 @@
 import { styleText } from "node:util";
-import type { Check, ClaimResult, Ladder, Outcome, Rung, Verdict } from "../result/result.js";
-import { size, steps } from "../result/words.js";
+import type { BudgetPart, Check, ClaimResult, Ladder, Outcome, Rung, Verdict } from "../result/result.js";
+import { BUDGET_WORDS, size, steps } from "../result/words.js";
 import { apart, asWritten, bestShown, blanks, margin, shown, stepsPerOrbit } from "./format.js";
 import { clean, columns, cut, padEnd, padStart, wrap } from "./text.js";
 
@@ -56,6 +56,7 @@ export function renderTerminal(result: ClaimResult, options: TerminalOptions): s
     heading(result, width, paint),
     wrap(clean(result.reason), width),
     figures(result, width),
+    budget(result, width),
     checks(result.checks, width, paint),
     ladder(result, width, paint),
     remedy(result, width),
@@ -88,7 +89,10 @@ function heading(result: ClaimResult, width: number, paint: Paint): string[] {
   ];
 }
 
-function figures({ claimed, asSolved, crossReading, best, setup }: ClaimResult, width: number): string[] {
+function figures(
+  { claimed, asSolved, crossReading, best, reference, setup }: ClaimResult,
+  width: number,
+): string[] {
   if (claimed === null) return [];
   const fine = Math.max(best.halfWidth ?? 0, claimed.halfWidth / 1000);
   const number = (value: number | null): string => (value === null ? "none" : shown(value, fine));
@@ -117,8 +121,18 @@ function figures({ claimed, asSolved, crossReading, best, setup }: ClaimResult, 
       "best value",
       best.value === null ? "none" : bestShown(best.value, best.halfWidth, claimed),
       half(best.halfWidth),
-      best.from === null ? "" : `by ${best.from}`,
+      best.from === null ? "" : best.from === "reference" ? agreement(reference) : "by extrapolation",
     ],
+    ...(best.from === "reference" && best.extrapolated !== null
+      ? [
+          [
+            "by the ladders",
+            bestShown(best.extrapolated.value, best.extrapolated.halfWidth, claimed),
+            half(best.extrapolated.halfWidth),
+            "the witnesses' limits alone",
+          ],
+        ]
+      : []),
     [
       "error",
       asSolved.error === null ? "none" : size(asSolved.error),
@@ -129,11 +143,27 @@ function figures({ claimed, asSolved, crossReading, best, setup }: ClaimResult, 
   return table(inLine(rows, [1]), ["left", "right", "left", "left"], width);
 }
 
+/** How the reference was had, short enough for a line of figures. */
+const agreement = (reference: ClaimResult["reference"]): string =>
+  reference?.apart == null ? "by reference" : `reference, two methods ${size(reference.apart)} apart`;
+
+/** The parts of the uncertainty, the dominant one named. */
+function budget({ budget: parts, claimed }: ClaimResult, width: number): string[] {
+  if (parts === null || claimed === null || parts.dominant === null) return [];
+  const rest = (Object.keys(BUDGET_WORDS) as BudgetPart[])
+    .filter((part) => part !== parts.dominant && parts[part] !== null)
+    .map((part) => `${BUDGET_WORDS[part]} ${size(parts[part]!)}`);
+  const most = `${BUDGET_WORDS[parts.dominant]} ${size(parts[parts.dominant]!)} ${clean(claimed.unit)}`;
+  return wrap(`Budget: most is ${most}; ${rest.join(", ")}.`, width);
+}
+
 function howSolved(setup: ClaimResult["setup"]): string {
   if (setup?.method == null) return "no solution given";
-  const { method, step, stepsPerOrbit: perOrbit } = setup;
+  const { method, arithmetic, step, stepsPerOrbit: perOrbit } = setup;
   const isPerOrbit = step !== null && /orbit/.test(step);
   const count = perOrbit === null || isPerOrbit ? [] : [steps(perOrbit)];
+  // A line has no room for the step as well; the checks name it.
+  if (arithmetic === "single") return `${method.name} in single precision`;
   return [method.name, ...(step === null ? [] : [clean(step)]), ...count].join(", ");
 }
 

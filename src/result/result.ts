@@ -245,6 +245,8 @@ export interface Setup {
     readonly order: number;
     readonly source: string;
   } | null;
+  /** Of the author's program; null without a solution. */
+  readonly arithmetic: "double" | "single" | null;
   /** As written in the claim. */
   readonly step: string | null;
   readonly stepsPerOrbit: number | null;

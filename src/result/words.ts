@@ -1,4 +1,4 @@
-import type { RungStatus } from "./result.js";
+import type { BudgetPart, RungStatus } from "./result.js";
 
 /** A size in a sentence: three significant digits, without an exponent where it reads well. */
 export function size(value: number): string {
@@ -33,6 +33,15 @@ export function bestInWords(
 }
 
 export const plural = (count: number, noun: string): string => `${count} ${noun}${count === 1 ? "" : "s"}`;
+
+/** The parts of the budget, in words. */
+export const BUDGET_WORDS: Readonly<Record<BudgetPart, string>> = {
+  truncation: "truncation",
+  rounding: "rounding",
+  readingOff: "reading-off",
+  methodSpread: "method spread",
+  sampling: "sampling",
+};
 
 /** Steps an orbit in a sentence. */
 export const steps = (perOrbit: number): string =>

@@ -131,6 +131,7 @@ const solved: ClaimResult = {
     start: [{ name: "x", value: 4.6e10, unit: "m" }],
     span: "20 orbits",
     method: { name: "rk4", title: "Classical fourth-order", order: 4, source: "none" },
+    arithmetic: "double",
     step: "256 steps an orbit",
     stepsPerOrbit: 256,
     witnesses: [],

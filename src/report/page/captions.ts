@@ -6,10 +6,9 @@ import type {
   Outcome,
   PassageSeries,
 } from "../../result/result.js";
-import { plural, size } from "../../result/words.js";
+import { BUDGET_WORDS, plural, size } from "../../result/words.js";
 import { isZoomed } from "./plots/intervals.js";
 import { stepsView } from "./plots/steps-view.js";
-import { BUDGET_WORDS } from "./words.js";
 
 /** Captions say what to look for in this case: each is written from its figures. */
 

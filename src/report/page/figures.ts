@@ -74,6 +74,16 @@ export function figureRows({
       best.halfWidth,
       typeset(best.says),
     ),
+    ...(best.from !== "reference" || best.extrapolated === null
+      ? []
+      : [
+          row(
+            "by the ladders",
+            typeset(bestShown(best.extrapolated.value, best.extrapolated.halfWidth, claimed)),
+            best.extrapolated.halfWidth,
+            "where the witnesses' ladders lead, without the reference",
+          ),
+        ]),
     row(
       "numerical error",
       asSolved.error === null ? NONE : typeset(size(asSolved.error)),

@@ -8,9 +8,9 @@ interface Row {
 }
 
 /** What was run and with what, every number in full. */
-export function setupRows({ setup }: ClaimResult): readonly Row[] {
+export function setupRows({ setup, reference, rounding }: ClaimResult): readonly Row[] {
   if (setup === null) return [];
-  const { method, stepsPerOrbit: count, step } = setup;
+  const { method, arithmetic, stepsPerOrbit: count, step } = setup;
   const amounts = (list: typeof setup.start): Row[] =>
     list.map(({ name, value, unit }) => ({
       name,
@@ -32,6 +32,9 @@ export function setupRows({ setup }: ClaimResult): readonly Row[] {
       value:
         step === null ? "not given" : /orbit/.test(step) ? step : [step, perOrbit].filter(Boolean).join(", "),
     },
+    ...(arithmetic === null ? [] : [{ name: "arithmetic", value: `${arithmetic} precision` }]),
+    ...(reference === null ? [] : [{ name: "reference", value: typeset(reference.says) }]),
+    ...(rounding === null ? [] : [{ name: "rounding", value: typeset(rounding.says) }]),
   ];
 }
 

@@ -1,4 +1,4 @@
-import type { BudgetPart, Outcome, RungStatus, Verdict } from "../../result/result.js";
+import type { Outcome, RungStatus, Verdict } from "../../result/result.js";
 
 export const VERDICT_TITLES: Readonly<Record<Verdict, string>> = {
   resolved: "Resolved",
@@ -13,14 +13,6 @@ export const OUTCOME_TITLES: Readonly<Record<Outcome, string>> = {
   caution: "caution",
   fail: "fails",
   "not-checked": "not checked",
-};
-
-export const BUDGET_WORDS: Readonly<Record<BudgetPart, string>> = {
-  truncation: "truncation",
-  rounding: "rounding",
-  readingOff: "reading-off",
-  methodSpread: "method spread",
-  sampling: "sampling",
 };
 
 /** A catalog or ledger name as words. */

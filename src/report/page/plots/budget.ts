@@ -1,7 +1,7 @@
 import type { ClaimResult } from "../../../result/result.js";
-import { size as inWords } from "../../../result/words.js";
+import { BUDGET_WORDS, size as inWords } from "../../../result/words.js";
 import { typeset } from "../typeset.js";
-import { BUDGET_WORDS } from "../words.js";
+
 import { axes, logTicks } from "./axes.js";
 import { type Canvas, draw } from "./frame.js";
 
