@@ -1,4 +1,5 @@
 import type { Estimate } from "../convergence/extrapolation.js";
+import { referenceSource } from "../reference/orbit.js";
 import type { ClaimResult } from "../result/result.js";
 import type { Investigation } from "./investigate.js";
 
@@ -29,6 +30,7 @@ export function referenceOf({ reference }: Investigation, unit: string): ClaimRe
       halfWidth: null,
       apart: null,
       methods: [],
+      source: null,
       evaluations: null,
       says: `There is no reference: ${reference.none}.`,
     };
@@ -39,6 +41,7 @@ export function referenceOf({ reference }: Investigation, unit: string): ClaimRe
     halfWidth,
     apart,
     methods,
+    source: referenceSource,
     evaluations,
     says: `The scenario solved again in double-double arithmetic, some 31 digits, by ${methods.join(" and by ")}; they agree to ${apart.toPrecision(2)} ${unit}.`,
   };

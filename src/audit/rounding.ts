@@ -32,12 +32,13 @@ export function roundingOf(solution: AnalysedLadder | null, inTime: boolean): Cl
   if (apsisGrowth === null) {
     return { apsisGrowth, phaseGrowth, says: "Too few passages to tell how rounding grows." };
   }
-  const phase = phaseGrowth === null ? "" : ` and as t^${phaseGrowth.toFixed(2)} in the time of passage`;
+  const phase =
+    phaseGrowth === null ? "" : `, with the power ${phaseGrowth.toFixed(2)} in the time of passage`;
   const law = phaseGrowth === null ? "0.5" : "0.5 and 1.5";
   return {
     apsisGrowth,
     phaseGrowth,
-    says: `In ${arithmetic} precision, runs that differ in the last bits spread as t^${apsisGrowth.toFixed(2)} in the apsis${phase}${judgement(apsisGrowth, law)}`,
+    says: `In ${arithmetic} precision, runs that differ in the last bits spread in the apsis with the power ${apsisGrowth.toFixed(2)} of time${phase}${judgement(apsisGrowth, law)}`,
   };
 }
 

@@ -25,6 +25,9 @@ import { taylorStepper } from "./taylor.js";
 export const referenceMethods = ["extrapolation", "taylor"] as const;
 export type ReferenceMethod = (typeof referenceMethods)[number];
 
+export const referenceSource =
+  "A. Jorba and M. Zou, Exp. Math. 14, 99 (2005), for the Taylor series; W. B. Gragg, SIAM J. Numer. Anal. 2, 384 (1965), for the extrapolation; M. Joldes, J.-M. Muller and V. Popescu, ACM Trans. Math. Softw. 44, 15 (2017), for the arithmetic";
+
 const steppers: Readonly<
   Record<ReferenceMethod, (system: CompiledSystem, options: StepperOptions) => Stepper>
 > = { extrapolation: extrapolationStepper, taylor: taylorStepper };

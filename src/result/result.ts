@@ -97,6 +97,8 @@ export interface ClaimResult {
     readonly apart: number | null;
     /** The first carries the value. */
     readonly methods: readonly string[];
+    /** Where its methods are published. */
+    readonly source: string | null;
     readonly evaluations: number | null;
     readonly says: string;
   } | null;

@@ -45,8 +45,10 @@ const formOf = ({ equations }: NonNullable<ClaimResult["setup"]>): string =>
   equations.form === "angle" ? "the angle as the independent variable" : "in time";
 
 /** Published sources of the equations and of every method that ran. */
-export function sourceRows({ setup }: ClaimResult): readonly Row[] {
+export function sourceRows({ setup, reference }: ClaimResult): readonly Row[] {
   if (setup === null) return [];
   const methods = setup.method === null ? setup.witnesses : [setup.method, ...setup.witnesses];
-  return [setup.equations, ...methods].map(({ name, source }) => ({ name, value: typeset(source) }));
+  const rows = [setup.equations, ...methods].map(({ name, source }) => ({ name, value: typeset(source) }));
+  const source = reference?.source ?? null;
+  return source === null ? rows : [...rows, { name: "reference", value: typeset(source) }];
 }
