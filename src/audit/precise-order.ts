@@ -8,8 +8,9 @@ import { costPerStep } from "./tasks.js";
 
 /** A state order as far off as this from the formal one may be the work of rounding, or of steps still too coarse. */
 const DOUBTFUL = 0.4;
-/** Evaluations that the double-double runs may take, well under a second. */
-const AFFORDABLE = 2e6;
+/** Evaluations that the double-double runs may take, a quarter of a second; and rungs, the last far below any step. */
+const AFFORDABLE = 1e6;
+const MOST_RUNGS = 16;
 /** Two units of the last place of double-double, for each step. */
 const ROUNDING = 2 ** -103;
 
@@ -30,7 +31,7 @@ export async function withPreciseOrder(
   const first = rungs[0]!.step * 2 ** ladder.runs.coarserEarly.length;
   const perStep = costPerStep(method);
   let count = 4;
-  while (count < rungs.length && ((2 * scenario.period) / first) * 2 ** count * perStep < AFFORDABLE) count++;
+  while (count < MOST_RUNGS && ((2 * scenario.period) / first) * 2 ** count * perStep < AFFORDABLE) count++;
   const distances = await pool.run(
     { kind: "early-distances", system, method, scenario, step: first, rungs: count },
     signal,
