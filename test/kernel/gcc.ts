@@ -20,12 +20,12 @@ export interface Compiled {
   remove(): void;
 }
 
-export function compileC(source: string): Compiled {
+export function compileC(source: string, flags: readonly string[] = []): Compiled {
   const folder = mkdtempSync(join(tmpdir(), "twin-"));
   const file = join(folder, "twin.c");
   const program = join(folder, "twin");
   writeFileSync(file, source);
-  execFileSync("gcc", ["-O2", "-ffp-contract=off", "-o", program, file, "-lm"]);
+  execFileSync("gcc", ["-O2", "-ffp-contract=off", ...flags, "-o", program, file, "-lm"]);
   return {
     run: () => execFileSync(program, { encoding: "utf8", maxBuffer: 1 << 26 }),
     remove: () => rmSync(folder, { recursive: true, force: true }),
@@ -33,8 +33,8 @@ export function compileC(source: string): Compiled {
 }
 
 /** Compiles a C program, runs it once, and gives what it prints. */
-export function runC(source: string): string {
-  const program = compileC(source);
+export function runC(source: string, flags: readonly string[] = []): string {
+  const program = compileC(source, flags);
   try {
     return program.run();
   } finally {
