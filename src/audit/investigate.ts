@@ -5,7 +5,7 @@ import { nominalLength } from "../measure/limits.js";
 import type { MethodDefinition } from "../methods/definition.js";
 import { type ExecuteOptions, execute } from "./execute.js";
 import { type Extras, gather } from "./gather.js";
-import { type AnalysedLadder, analyse } from "./ladders.js";
+import { type AnalysedLadder, analyseRuns } from "./ladders.js";
 import { type LadderPlan, planLadder, rungsWorthRunning } from "./plan.js";
 import type { JobPool } from "./pool.js";
 import { withPreciseOrder } from "./precise-order.js";
@@ -102,7 +102,7 @@ export async function investigate(
       outcomes,
     ),
   );
-  const analysed = gathered.map(({ runs }) => analyse(runs, scenario, unit, subtracted));
+  const analysed = gathered.map(({ runs }) => analyseRuns(runs, scenario, unit, subtracted));
   const ladders = await Promise.all(
     analysed.map((ladder) =>
       ladder.runs.role === "witness"

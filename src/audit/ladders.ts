@@ -9,6 +9,7 @@ import type { PreparedScenario } from "../measure/run.js";
 import { figureOf } from "./figure.js";
 import type { Reading } from "./job.js";
 import type { MethodRuns } from "./method-runs.js";
+import { passageShares, withShares } from "./passage-share.js";
 import { roundingGrowth } from "./rounding.js";
 
 /** One method's ladder, analysed; figures in the claim's unit. */
@@ -32,7 +33,7 @@ export interface AnalysedLadder {
  * those of the run and its null run, and its limit is the tighter of the difference of their limits and the
  * limit of the differences.
  */
-export function analyse(
+export function analyseRuns(
   runs: MethodRuns,
   scenario: PreparedScenario,
   unit: QuotedUnit,
@@ -43,9 +44,20 @@ export function analyse(
   const off = points(runs, unit, push, (_, off) => off);
   const difference = differencePoints(runs, unit, push);
   const figure = subtracted ? difference : raw;
+  const rungs = runs.rungs.map(({ step }) => ({ step, perOrbit: scenario.period / step }));
+  const shares = (ladder: readonly LadderPoint[], of: "on" | "off") =>
+    passageShares(
+      ladder,
+      runs.rungs.map((rung) => rung[of]),
+      rungs,
+      runs.method.order,
+    );
+  const [ofRaw, ofOff] = [shares(raw, "on"), shares(off, "off")];
+  const analyse = (ladder: readonly LadderPoint[], ...shares: readonly (readonly number[])[]) =>
+    analyseLadder(withShares(ladder, ...shares));
   const analysis = subtracted
-    ? subtractedAnalysis(analyseLadder(raw), analyseLadder(off), analyseLadder(figure))
-    : analyseLadder(raw);
+    ? subtractedAnalysis(analyse(raw, ofRaw), analyse(off, ofOff), analyse(figure, ofRaw, ofOff))
+    : analyse(raw, ofRaw);
   const stateDistances = distances(runs, scenario);
   return {
     runs,
