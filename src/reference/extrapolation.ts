@@ -12,7 +12,7 @@ import { compilePrecise, type PreciseFunction } from "../kernel/precise-loop.js"
 import type { CompiledSystem } from "../kernel/system.js";
 import { radialMotion, scales } from "./rates.js";
 import { SeriesTable } from "./series.js";
-import type { PreciseState, Stepper, StepperOptions } from "./stepper.js";
+import { type PreciseState, type Stepper, type StepperOptions, trackFrom } from "./stepper.js";
 
 /** Rows of the extrapolation tableau for a digit of tolerance: order 2 k for 10^-(1.5 k). */
 const DIGITS_A_ROW = 1.5;
@@ -77,12 +77,8 @@ export function extrapolationStepper(system: CompiledSystem, options: StepperOpt
   });
   const motion = radialMotion(system, parameters);
   const io = new Float64Array(2 * n);
-  let before = options.state;
-  let state = options.state;
-  let rate = toDouble(motion.rate(state));
-  let rateBefore = rate;
+  const track = trackFrom(options.state, (state) => toDouble(motion.rate(state)));
   let next = options.firstStep;
-  let evaluations = 0;
 
   /** The extrapolated state after a step, and how far it is from the one without the coarsest row. */
   const across = (
@@ -95,7 +91,7 @@ export function extrapolationStepper(system: CompiledSystem, options: StepperOpt
         io[n + i] = from[i]!.low;
       }
       midpoint.run(io, parameters, scaledDown(length, steps), steps);
-      evaluations += steps;
+      track.evaluations += steps;
       // Rows run backwards, as the second factor of a product of series does.
       for (let i = 0; i < n; i++) table.set(i, last - row, { high: io[i]!, low: io[n + i]! });
     });
@@ -109,41 +105,23 @@ export function extrapolationStepper(system: CompiledSystem, options: StepperOpt
     return { to, error };
   };
 
-  return {
+  return Object.assign(track, {
     name: `extrapolation of order ${2 * rows.length}`,
-    get before() {
-      return before;
-    },
-    get state() {
-      return state;
-    },
-    get rateBefore() {
-      return rateBefore;
-    },
-    get rate() {
-      return rate;
-    },
-    get evaluations() {
-      return evaluations;
-    },
-    within: (length) => across(before, length).to,
+    within: (length: DoubleDouble) => across(track.before, length).to,
     step() {
       for (let refusals = 0; refusals < MOST_REFUSALS; refusals++) {
         const length: DoubleDouble = { high: next, low: 0 };
-        const { to, error } = across(state, length);
+        const { to, error } = across(track.state, length);
         const finite = Number.isFinite(error);
         const wish = finite ? SAFETY * (tolerance / error) ** (1 / (2 * rows.length - 1)) : 0;
         next *= Math.min(MOST_GROWTH, Math.max(1 / MOST_SHRINKAGE, wish));
         if (!finite || error > tolerance) continue;
-        before = state;
-        state = to;
-        rateBefore = rate;
-        rate = toDouble(motion.rate(state));
+        track.moveTo(to);
         return length;
       }
       return null;
     },
-  };
+  });
 }
 
 /** A length by a whole number: only a power of two divides exactly. */

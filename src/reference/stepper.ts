@@ -21,6 +21,35 @@ export interface Stepper {
   readonly evaluations: number;
 }
 
+/** Where a stepper is: what it changes as it goes. */
+export interface Track {
+  before: PreciseState;
+  state: PreciseState;
+  rateBefore: number;
+  rate: number;
+  evaluations: number;
+  /** Goes on to the end of a step. */
+  moveTo(state: PreciseState): void;
+}
+
+/** @param rateAt radial rate of a state */
+export function trackFrom(state: PreciseState, rateAt: (state: PreciseState) => number): Track {
+  const rate = rateAt(state);
+  return {
+    before: state,
+    state,
+    rateBefore: rate,
+    rate,
+    evaluations: 0,
+    moveTo(to) {
+      this.before = this.state;
+      this.rateBefore = this.rate;
+      this.state = to;
+      this.rate = rateAt(to);
+    },
+  };
+}
+
 /** What a method is asked to keep to: the error of a step, as a part of position and velocity each. */
 export interface StepperOptions {
   readonly state: PreciseState;

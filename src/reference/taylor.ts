@@ -2,7 +2,7 @@ import { type DoubleDouble, divide, fromDouble, ONE, shift, toDouble } from "../
 import type { CompiledSystem } from "../kernel/system.js";
 import { radialMotion, scales } from "./rates.js";
 import { SeriesTable } from "./series.js";
-import type { PreciseState, Stepper, StepperOptions } from "./stepper.js";
+import { type PreciseState, type Stepper, type StepperOptions, trackFrom } from "./stepper.js";
 import { type TaylorProgram, taylorProgram } from "./taylor-program.js";
 
 /** Order of the series for a tolerance: half its natural logarithm and one more (Jorba and Zou, 3.3.2), a few over. */
@@ -39,11 +39,7 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
   const motion = radialMotion(system, parameters);
   const perStep = (program.recurrences.length * order * order) / 2 / PRODUCTS_AN_EVALUATION;
   for (const [slot, value] of program.constants(parameters)) table.set(slot, 0, value);
-  let before = options.state;
-  let state = options.state;
-  let rate = toDouble(motion.rate(state));
-  let rateBefore = rate;
-  let evaluations = 0;
+  const track = trackFrom(options.state, (state) => toDouble(motion.rate(state)));
   /** Unit of time of the series, near the length of a step: coefficients neither over- nor underflow. */
   let unit = 1;
   let last = options.firstStep;
@@ -65,7 +61,7 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
         table.integrate(v, k, program.accelerations[i]!, reciprocals);
       }
     }
-    evaluations += perStep;
+    track.evaluations += perStep;
   };
   const sizeOf = (k: number, first: number, last: number): number => {
     let square = 0;
@@ -77,27 +73,12 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
     return program.states.map((slot) => table.evaluate(slot, part));
   };
 
-  return {
+  return Object.assign(track, {
     name: `Taylor series of order ${order}`,
-    get before() {
-      return before;
-    },
-    get state() {
-      return state;
-    },
-    get rateBefore() {
-      return rateBefore;
-    },
-    get rate() {
-      return rate;
-    },
-    get evaluations() {
-      return evaluations;
-    },
     within: at,
     step() {
-      expand(state);
-      const [position, velocity] = scales(system, state);
+      expand(track.state);
+      const [position, velocity] = scales(system, track.state);
       let most = Number.POSITIVE_INFINITY;
       for (const k of [order - 1, order]) {
         const term = Math.max(sizeOf(k, 0, half) / position, sizeOf(k, half, n) / velocity);
@@ -106,11 +87,8 @@ export function taylorStepper(system: CompiledSystem, options: StepperOptions): 
       const length: DoubleDouble = { high: SAFETY * most * unit, low: 0 };
       if (!(Number.isFinite(length.high) && length.high > 0)) return null;
       last = length.high;
-      before = state;
-      state = at(length);
-      rateBefore = rate;
-      rate = toDouble(motion.rate(state));
+      track.moveTo(at(length));
       return length;
     },
-  };
+  });
 }
