@@ -1,4 +1,5 @@
-import { add, fromFraction, multiply, ONE, subtract } from "../arithmetic/double-double.js";
+import Fraction from "fraction.js";
+import { type DoubleDouble, fromFraction, multiply } from "../arithmetic/double-double.js";
 import { exactDecimal } from "../formula/decimal.js";
 import { echo } from "./problem.js";
 import type { Quantity } from "./quantity.js";
@@ -12,6 +13,7 @@ interface Apsides {
 }
 
 const SIZES = ["periapsis", "apoapsis", "semi-major-axis", "eccentricity"] as const;
+const ONE = new Fraction(1);
 const CIRCLE = "a circle has no apsis to turn";
 
 /** Least and greatest distance in m, from either pair of keys; null, with problems noted, when they are not. */
@@ -57,10 +59,11 @@ function fromAxis(raw: PartialStart, report: Reporter): Apsides | null {
     return null;
   }
   if (axis === null) return null;
-  // What was written is the decimal.
-  const precise = fromFraction(exactDecimal(String(e)));
+  // What was written is the decimal; rounded before it is taken from 1, it would cost digits near 1.
+  const exact = exactDecimal(String(e));
+  const times = (part: Fraction): DoubleDouble => multiply(axis.precise, fromFraction(part));
   return {
-    periapsis: { value: axis.value * (1 - e), precise: multiply(axis.precise, subtract(ONE, precise)) },
-    apoapsis: { value: axis.value * (1 + e), precise: multiply(axis.precise, add(ONE, precise)) },
+    periapsis: { value: axis.value * (1 - e), precise: times(ONE.sub(exact)) },
+    apoapsis: { value: axis.value * (1 + e), precise: times(ONE.add(exact)) },
   };
 }
